@@ -1,0 +1,40 @@
+import type { Request, Response } from 'express';
+import type { Endpoint } from '../../shared/api/endpoint.ts';
+import { may, type Role } from '../../shared/rules/authorization.ts';
+import { HttpProblem, notFound } from '../http/problem.ts';
+import type { Services } from '../services.ts';
+import { sessionOf } from './sessions.ts';
+
+/** Who asks, and what they are at the farm of the address. */
+export interface Caller {
+  userId: string;
+  sessionId: string;
+  name: string;
+  email: string;
+  /** At the farm of the address; null where the address names none. */
+  role: Role | null;
+  farmId: string | null;
+}
+
+const uuid = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/i;
+
+/**
+ * Decides whether the request may go on, from the endpoint's line in the authorization table.
+ * A farm one does not belong to answers 404, as one that does not exist: ids reveal nothing.
+ */
+export async function authorize(endpoint: Endpoint, request: Request, response: Response, services: Services): Promise<Caller | null> {
+  const { access } = endpoint;
+  if (access === 'demo' && !services.settings.demo) throw notFound();
+  if (access === 'public' || access === 'demo' || access === 'signature') return null;
+  const session = await sessionOf(request, response, services);
+  if (!session) throw new HttpProblem(401, 'Sign in, then try again.');
+  if (access === 'signedIn') return { ...session, role: null, farmId: null };
+  const farmId = request.params['farmId'];
+  if (typeof farmId !== 'string' || !uuid.test(farmId)) throw notFound();
+  const membership = await services.models.memberships.findOne({ where: { farmId, userId: session.userId }, raw: true });
+  if (!membership) throw notFound();
+  if (!may(membership.role, access.action, access.resource)) {
+    throw new HttpProblem(403, `As ${membership.role} of this farm you may not do this; ask an owner.`);
+  }
+  return { ...session, role: membership.role, farmId };
+}
