@@ -11,6 +11,8 @@ export const up: Migration = statements(
     issued_at DATETIME(3) NULL,
     fetched_at DATETIME(3) NOT NULL,
     expires_at DATETIME(3) NULL,
+    -- Last time the provider was asked and had nothing newer.
+    checked_at DATETIME(3) NOT NULL,
     place_latitude DOUBLE NOT NULL,
     place_longitude DOUBLE NOT NULL,
     place_elevation_m DOUBLE NULL,
@@ -69,6 +71,8 @@ export const up: Migration = statements(
     ${id('forecast_id', 'NULL')},
     ${json('daybreaks', 'body')},
     assessed_at DATETIME(3) NOT NULL,
+    -- After this instant the body no longer holds: the forecast is stale or the morning is over.
+    valid_until DATETIME(3) NOT NULL,
     PRIMARY KEY (farm_id),
     CONSTRAINT daybreaks_farm_fk FOREIGN KEY (farm_id) REFERENCES farms (id) ON DELETE CASCADE,
     CONSTRAINT daybreaks_forecast_fk FOREIGN KEY (forecast_id) REFERENCES forecasts (id) ON DELETE SET NULL

@@ -11,6 +11,7 @@ export interface ForecastRow {
   issuedAt: Date | null;
   fetchedAt: Date;
   expiresAt: Date | null;
+  checkedAt: Date;
   placeLatitude: number;
   placeLongitude: number;
   placeElevationM: number | null;
@@ -54,13 +55,15 @@ export interface VerdictRow {
 export interface DaybreakRow {
   farmId: string;
   forecastId: string | null;
-  body: unknown;
+  /** JSON text, sent as it is. */
+  body: string;
   assessedAt: Date;
+  validUntil: Date;
 }
 
 export const weatherTables = (sequelize: Sequelize) => ({
   forecasts: table<ForecastRow>(sequelize, 'forecasts', {
-    id: key(), farmId: reference(), provider: text(12), model: textOrNull(120), issuedAt: instantOrNull(), fetchedAt: instant(), expiresAt: instantOrNull(), placeLatitude: number(), placeLongitude: number(),
+    id: key(), farmId: reference(), provider: text(12), model: textOrNull(120), issuedAt: instantOrNull(), fetchedAt: instant(), expiresAt: instantOrNull(), checkedAt: instant(), placeLatitude: number(), placeLongitude: number(),
     placeElevationM: numberOrNull(), etag: textOrNull(300), lastModified: textOrNull(80), standInBecause: textOrNull(300), hours: jsonColumn('hours'), createdAt: instant(),
   }),
   readings: table<ReadingRow>(sequelize, 'readings', {
@@ -71,5 +74,5 @@ export const weatherTables = (sequelize: Sequelize) => ({
     id: key(), farmId: reference(), planId: referenceOrNull(), planKey: text(36), morning: day(), revision: integer(), verdict: text(4), enoughToTell: flag(), bindingLimit: textOrNull(40), forecastId: referenceOrNull(),
     summary: jsonColumn('summary'), decidedAt: instant(),
   }),
-  daybreaks: table<DaybreakRow>(sequelize, 'daybreaks', { farmId: key(), forecastId: referenceOrNull(), body: jsonColumn('body'), assessedAt: instant() }),
+  daybreaks: table<DaybreakRow>(sequelize, 'daybreaks', { farmId: key(), forecastId: referenceOrNull(), body: text(), assessedAt: instant(), validUntil: instant() }),
 });

@@ -1,0 +1,46 @@
+import { QueryTypes, Sequelize, Transaction, type BindOrReplacements } from 'sequelize';
+
+/** Opens a pool of connections to MariaDB. Times are UTC, isolation READ COMMITTED (no gap locks). */
+export function createDatabase(url: string, options: { poolMax?: number } = {}): Sequelize {
+  return new Sequelize(url, {
+    dialect: 'mariadb',
+    logging: false,
+    timezone: '+00:00',
+    isolationLevel: Transaction.ISOLATION_LEVELS.READ_COMMITTED,
+    pool: { max: options.poolMax ?? 10, min: 0, idle: 10_000, acquire: 15_000 },
+    define: { charset: 'utf8mb4' },
+    dialectOptions: { connectTimeout: 10_000 },
+  });
+}
+
+/** The one door for raw reading: without `type` the driver's third version fails in Sequelize 6. */
+export function select<Row extends object>(sequelize: Sequelize, sql: string, replacements: BindOrReplacements = {}, transaction: Transaction | null = null): Promise<Row[]> {
+  return sequelize.query<Row>(sql, { replacements, transaction, type: QueryTypes.SELECT });
+}
+
+/** The one door for raw writing; answers the number of rows touched. */
+export async function execute(sequelize: Sequelize, sql: string, replacements: BindOrReplacements = {}, transaction: Transaction | null = null): Promise<number> {
+  const [, touched] = await sequelize.query(sql, { replacements, transaction, type: QueryTypes.UPDATE });
+  return touched;
+}
+
+/** Deadlock, lock wait, record changed since read (Galera certification shows as 1213). */
+const passing = new Set([1213, 1205, 1020]);
+const triesMax = 6;
+
+function isPassing(error: unknown): boolean {
+  const parent = (error as { parent?: { errno?: number } } | null)?.parent;
+  return parent?.errno !== undefined && passing.has(parent.errno);
+}
+
+/** Runs work in one transaction and repeats it when the database asks for that. The work must bear repetition. */
+export async function inTransaction<T>(sequelize: Sequelize, work: (transaction: Transaction) => Promise<T>, random: () => number = Math.random): Promise<T> {
+  for (let attempt = 1; ; attempt += 1) {
+    try {
+      return await sequelize.transaction(work);
+    } catch (error) {
+      if (attempt >= triesMax || !isPassing(error)) throw error;
+      await new Promise((resolve) => setTimeout(resolve, random() * 20 * 2 ** attempt));
+    }
+  }
+}
