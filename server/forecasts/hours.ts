@@ -28,6 +28,8 @@ const overshoot: Partial<Record<HourField, number>> = { relativeHumidityPct: 5, 
 /** A value in canonical units, or null when it is none or impossible. */
 export function possible(field: HourField, value: number | null | undefined): number | null {
   if (value === null || value === undefined || !Number.isFinite(value)) return null;
+  // Bearings are told in the circle, 360 as well as 0 for north.
+  if (field === 'windFromDeg') return Math.round((((value % 360) + 360) % 360) * 1000) / 1000;
   const { min, max } = hourFields[field];
   const slack = overshoot[field] ?? 0;
   if (value < min - slack || value > max + slack) return null;
