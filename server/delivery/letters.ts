@@ -1,8 +1,7 @@
-import { randomUUID } from 'node:crypto';
 import type { Transaction } from 'sequelize';
-import { maskedAddress } from './mask.ts';
-import { outboxSignal } from './signal.ts';
 import type { Services } from '../services.ts';
+import { maskedAddress } from './mask.ts';
+import { queueDelivery } from './outbox.ts';
 
 /** A letter outside any notice: a confirmation, a reset, an invitation. */
 export interface Letter {
@@ -16,27 +15,18 @@ export interface Letter {
   usefulUntil: Date;
 }
 
-/** What a waiting letter keeps; blanked once it is delivered or given up, because it may carry tokens. */
-export interface LetterPayload {
-  letter: { subject: string; text: string; html: string };
-}
-
 /**
  * Puts a letter into the outbox, in the caller's transaction: it goes out if and only if that commits.
+ * Its text is blanked once it is delivered or given up, because it may carry tokens.
  * @returns false when a letter of this key is there already
  */
-export async function queueLetter({ models, clock, sequelize }: Services, transaction: Transaction, letter: Letter): Promise<boolean> {
-  const deliveryKey = `letter:${letter.key}`;
-  if ((await models.deliveries.count({ where: { deliveryKey }, transaction })) > 0) return false;
-  const now = clock.now();
-  const payload: LetterPayload = { letter: { subject: letter.subject, text: letter.text, html: letter.html } };
-  await models.deliveries.create(
-    {
-      id: randomUUID(), noticeId: null, farmId: null, channel: 'email', target: letter.to, recipient: maskedAddress(letter.to), deliveryKey, state: 'waiting', payload,
-      attempts: 0, dueAt: now, nextAttemptAt: now, usefulUntil: letter.usefulUntil, createdAt: now, updatedAt: now,
-    },
-    { transaction },
-  );
-  transaction.afterCommit(() => outboxSignal(sequelize).notify());
-  return true;
+export function queueLetter(services: Services, transaction: Transaction, letter: Letter): Promise<boolean> {
+  const { to, subject, text, html, key, usefulUntil } = letter;
+  return queueDelivery(services, transaction, {
+    noticeId: null, farmId: null, channel: 'email', target: to, recipient: maskedAddress(to), key: `${letterPrefix}${key}`, order: null,
+    payload: { subject, text, html, thread: null, lateNote: null }, dueAt: services.clock.now(), usefulUntil, ackTokenHash: null,
+  });
 }
+
+/** Begins the delivery key of a letter. */
+export const letterPrefix = 'letter:';

@@ -8,6 +8,8 @@ export interface NoticeRow {
   kind: NoticeKind;
   morning: string;
   revision: number;
+  /** Order of decision among the notices of this farm and morning. */
+  sequence: number;
   title: string;
   text: string;
   verdict: 'go' | 'hold' | null;
@@ -60,6 +62,9 @@ export interface DeliveryRow {
   target: string;
   recipient: string;
   deliveryKey: string;
+  /** Recipient, channel and morning; null where order does not matter. */
+  orderKey: string | null;
+  sequence: number;
   state: (typeof deliveryStates)[number];
   payload: unknown;
   attempts: number;
@@ -99,14 +104,27 @@ export interface InboundMessageRow {
   sourceId: string;
   messageId: string;
   receivedAt: Date;
+  claimedUntil: Date | null;
+  tries: number;
   body: unknown;
   processedAt: Date | null;
   outcome: string | null;
 }
 
+/** The next moment of one farm and kind; see server/schedule. */
+export interface MomentRow {
+  farmId: string;
+  kind: 'eve' | 'dawn' | 'refresh' | 'recheck';
+  dueAt: Date;
+  morning: string | null;
+  runAt: Date;
+  tries: number;
+  farmVersion: number;
+}
+
 export const noticeTables = (sequelize: Sequelize) => ({
   notices: table<NoticeRow>(sequelize, 'notices', {
-    id: key(), farmId: reference(), kind: text(20), morning: day(), revision: integer(), title: text(200), text: text(4000), verdict: textOrNull(4), enoughToTell: flagOrNull(), body: jsonColumn('body'), dueAt: instant(), usefulUntil: instant(), createdAt: instant(),
+    id: key(), farmId: reference(), kind: text(20), morning: day(), revision: integer(), sequence: integer(), title: text(200), text: text(4000), verdict: textOrNull(4), enoughToTell: flagOrNull(), body: jsonColumn('body'), dueAt: instant(), usefulUntil: instant(), createdAt: instant(),
   }),
   devices: table<DeviceRow>(sequelize, 'devices', {
     id: key(), farmId: reference(), userId: reference(), name: text(120), endpoint: text(1000), endpointHash: text(64), p256dh: text(100), auth: text(30), vapidKeyId: text(40), createdAt: instant(), lastAcceptedAt: instantOrNull(), lastShownAt: instantOrNull(), goneAt: instantOrNull(),
@@ -116,7 +134,7 @@ export const noticeTables = (sequelize: Sequelize) => ({
     id: key(), farmId: reference(), name: text(120), url: text(1000), kinds: jsonColumn('kinds'), secretSealed: text(400), active: flag(), disabledBecause: textOrNull(300), failingSince: instantOrNull(), lastDeliveredAt: instantOrNull(), createdAt: instant(), updatedAt: instant(),
   }),
   deliveries: table<DeliveryRow>(sequelize, 'deliveries', {
-    id: key(), noticeId: referenceOrNull(), farmId: referenceOrNull(), channel: text(10), target: text(254), recipient: text(300), deliveryKey: text(400), state: text(10), payload: jsonColumn('payload'), attempts: integer(), dueAt: instant(), nextAttemptAt: instantOrNull(),
+    id: key(), noticeId: referenceOrNull(), farmId: referenceOrNull(), channel: text(10), target: text(254), recipient: text(300), deliveryKey: text(400), orderKey: textOrNull(200), sequence: integer(), state: text(10), payload: jsonColumn('payload'), attempts: integer(), dueAt: instant(), nextAttemptAt: instantOrNull(),
     usefulUntil: instant(), claimedBy: textOrNull(80), leaseUntil: instantOrNull(), ackTokenHash: textOrNull(64), acceptedAt: instantOrNull(), shownAt: instantOrNull(), tappedAt: instantOrNull(), lastError: textOrNull(500), createdAt: instant(), updatedAt: instant(),
   }),
   deliveryAttempts: table<DeliveryAttemptRow>(sequelize, 'delivery_attempts', {
@@ -124,6 +142,7 @@ export const noticeTables = (sequelize: Sequelize) => ({
   }),
   inboundSources: table<InboundSourceRow>(sequelize, 'inbound_sources', { id: key(), farmId: reference(), name: text(120), secretSealed: text(400), lastReceivedAt: instantOrNull(), archivedAt: instantOrNull(), createdAt: instant() }),
   inboundMessages: table<InboundMessageRow>(sequelize, 'inbound_messages', {
-    sourceId: key(), messageId: { ...text(200), primaryKey: true }, receivedAt: instant(), body: jsonColumn('body'), processedAt: instantOrNull(), outcome: textOrNull(300),
+    sourceId: key(), messageId: { ...text(200), primaryKey: true }, receivedAt: instant(), claimedUntil: instantOrNull(), tries: integer(), body: jsonColumn('body'), processedAt: instantOrNull(), outcome: textOrNull(300),
   }),
+  moments: table<MomentRow>(sequelize, 'moments', { farmId: key(), kind: { ...text(10), primaryKey: true }, dueAt: instant(), morning: { ...day(), allowNull: true }, runAt: instant(), tries: integer(), farmVersion: integer() }),
 });

@@ -23,6 +23,9 @@ export const reasonSchema = z.object({
   /** UTC instant the reason speaks of, when it speaks of one. */
   at: z.string().nullable(),
   text: z.string(),
+  /** Name of the sentence and what it is filled with (SI units, UTC instants), for saying it in other units or another language. */
+  key: z.string().optional(),
+  params: z.record(z.string(), z.unknown()).optional(),
 });
 export type Reason = z.infer<typeof reasonSchema>;
 
@@ -57,6 +60,14 @@ export const sunSchema = z.object({
   localNoon: z.string(),
 });
 
+/** Start and end of flight of one kind within the morning: cautious (`possible…`) and likely; null where it does not happen. */
+export const beeBandSchema = z.object({
+  possibleFrom: z.string().nullable(),
+  likelyFrom: z.string().nullable(),
+  likelyUntil: z.string().nullable(),
+  possibleUntil: z.string().nullable(),
+});
+
 /** The answer of one assessment. All instants are UTC ISO 8601. */
 export const answerSchema = z.object({
   verdict: z.enum(['go', 'hold']),
@@ -66,6 +77,10 @@ export const answerSchema = z.object({
   reasons: z.array(reasonSchema),
   windows: z.array(windowSchema),
   sun: sunSchema,
+  /** By kind of bee, for the kinds the plan asks about. */
+  beeActivity: z.partialRecord(z.enum(beeKinds), beeBandSchema).optional(),
+  /** Wind here over the forecast's wind, learned from the farm's own readings; null below 5 usable ones. */
+  siteWindFactor: z.object({ factor: z.number(), readings: z.number() }).nullable().optional(),
   steps: z.array(stepSchema),
 });
 export type AssessmentAnswer = z.infer<typeof answerSchema>;

@@ -1,4 +1,7 @@
 import { z } from 'zod';
+import { dropletClasses } from '../droplets/classes.ts';
+import { releaseHeightValidity, usualReleaseHeightM } from '../droplets/drift-reach.ts';
+import { crossFieldProblems } from './case-rules.ts';
 
 /** A finite number that may be absent: null means "not known", never zero. */
 const known = (min: number, max: number) => z.number().min(min).max(max).nullable().default(null);
@@ -56,7 +59,10 @@ export const limitsSchema = z.strictObject({
   rainFreeHours: z.number().min(0).max(72).optional(),
   /** An hour with at least this much rain ends the dry spell. */
   rainMm: z.number().min(0).max(50).default(0.2),
-  rainProbabilityPct: z.number().min(0).max(100).default(40),
+  /** An hour with at least this chance of rain ends the dry spell; null = judged on the amount alone (a provider that tells no chance). */
+  rainProbabilityPct: z.number().min(0).max(100).nullable().default(40),
+  /** Greatest chance of any rain in all the dry hours together, on the cautious end 1 − Π(1 − p). */
+  rainChanceMaxPct: z.number().min(0).max(100).optional(),
   foliageDry: z.boolean().optional(),
   pollinators: z
     .strictObject({
@@ -90,8 +96,14 @@ export const readingSchema = z.strictObject({
 });
 export type Reading = z.infer<typeof readingSchema>;
 
-/** Everything that one assessment needs: the contract of `npm run assess`. */
-export const caseSchema = z.strictObject({
+/** What carries the spray; decides how far the finer droplets may go. */
+export const caseSprayerSchema = z.strictObject({
+  dropletClass: z.enum(dropletClasses).default('fine'),
+  /** Top of the spray above ground. */
+  releaseHeightM: z.number().min(releaseHeightValidity.releaseHeightM[0]).max(releaseHeightValidity.releaseHeightM[1]).default(usualReleaseHeightM),
+});
+
+const caseFields = z.strictObject({
   site: siteSchema,
   /** Local calendar date of the morning in the site's zone. */
   date: z.iso.date(),
@@ -102,5 +114,12 @@ export const caseSchema = z.strictObject({
   /** In order, one per hour, none doubled. Gaps are allowed and count as unknown. */
   hours: z.array(hourSchema).max(24 * 17),
   readings: z.array(readingSchema).max(2000).default([]),
+  /** Left out: the fine droplets of a backpack mist blower. */
+  sprayer: caseSprayerSchema.optional(),
+});
+
+/** Everything that one assessment needs: the contract of `npm run assess`. */
+export const caseSchema = caseFields.superRefine((theCase, context) => {
+  for (const { path, message } of crossFieldProblems(theCase)) context.addIssue({ code: 'custom', path, message });
 });
 export type AssessmentCase = z.infer<typeof caseSchema>;

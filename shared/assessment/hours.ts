@@ -1,0 +1,107 @@
+import { dewPointFromHumidityC, relativeHumidityPct } from '../atmosphere/humidity.ts';
+import type { ForecastHour } from './case.ts';
+
+export const hourMs = 3_600_000;
+
+/** Values that contradict each other are set aside as unknown; these are the kinds of it. */
+export const contradictions = ['dewPointAboveTemperature', 'humidityAgainstDewPoint', 'gustBelowWind', 'sunlightAtNight', 'sunlightTooStrong'] as const;
+export type Contradiction = (typeof contradictions)[number];
+
+/** Hours on a dense grid, one entry per hour from `startMs`; NaN = unknown. State values hold AT the hour, `…Of` values over it. */
+export interface HourTable {
+  startMs: number;
+  count: number;
+  temperatureC: Float64Array;
+  dewPointC: Float64Array;
+  windMs: Float64Array;
+  windFromDeg: Float64Array;
+  cloudPct: Float64Array;
+  gustOfMs: Float64Array;
+  rainOfMm: Float64Array;
+  rainChanceOfPct: Float64Array;
+  radiationOfWm2: Float64Array;
+  contradictions: Set<Contradiction>;
+  /** True when no hour of the table holds any value. */
+  isEmpty: boolean;
+}
+
+/** Tolerances of the cross-checks, from the rounding and the different moments that providers use: ours, no source. */
+const dewPointSlackC = 0.5;
+const humiditySlackPct = 15;
+const gustSlackMs = 0.5;
+
+const known = (value: number | null): number => value ?? NaN;
+
+/**
+ * Lays forecast hours on a dense grid and sets contradictory values aside.
+ * @param hours in order, start of hour in UTC @param startMs start of the grid, on the hour, epoch ms @param count hours of the grid
+ */
+export function tableOf(hours: readonly ForecastHour[], startMs: number, count: number): HourTable {
+  const column = (): Float64Array => new Float64Array(count).fill(NaN);
+  const table: HourTable = {
+    startMs,
+    count,
+    temperatureC: column(),
+    dewPointC: column(),
+    windMs: column(),
+    windFromDeg: column(),
+    cloudPct: column(),
+    gustOfMs: column(),
+    rainOfMm: column(),
+    rainChanceOfPct: column(),
+    radiationOfWm2: column(),
+    contradictions: new Set(),
+    isEmpty: true,
+  };
+  const first = firstAtOrAfter(hours, startMs);
+  for (let index = first; index < hours.length; index += 1) {
+    const hour = hours[index]!;
+    const at = (Date.parse(hour.time) - startMs) / hourMs;
+    if (at >= count) break;
+    fill(table, at, hour);
+  }
+  return table;
+}
+
+/** Index of the first hour not before an instant; hours are in order. */
+function firstAtOrAfter(hours: readonly ForecastHour[], instantMs: number): number {
+  let low = 0;
+  let high = hours.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (Date.parse(hours[middle]!.time) < instantMs) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
+
+function fill(table: HourTable, at: number, hour: ForecastHour): void {
+  table.isEmpty = false;
+  const temperature = known(hour.temperature2mC);
+  const wind = known(hour.windSpeed10mMs);
+  const gust = known(hour.windGust10mMs);
+  table.temperatureC[at] = temperature;
+  table.dewPointC[at] = dewPointOf(table, temperature, known(hour.dewPoint2mC), known(hour.relativeHumidityPct));
+  table.windMs[at] = wind;
+  table.windFromDeg[at] = known(hour.windFromDeg);
+  table.cloudPct[at] = known(hour.cloudCoverPct);
+  table.rainOfMm[at] = known(hour.precipitationMm);
+  table.rainChanceOfPct[at] = known(hour.precipitationProbabilityPct);
+  table.radiationOfWm2[at] = known(hour.shortwaveWm2);
+  if (gust < 0.8 * wind - gustSlackMs) table.contradictions.add('gustBelowWind');
+  else table.gustOfMs[at] = gust;
+}
+
+/** Dew point as given, else from temperature and humidity; unknown where the two disagree. */
+function dewPointOf(table: HourTable, temperatureC: number, dewPointC: number, humidityPct: number): number {
+  if (Number.isNaN(dewPointC)) return humidityPct > 0 ? dewPointFromHumidityC(temperatureC, humidityPct) : NaN;
+  if (dewPointC > temperatureC + dewPointSlackC) {
+    table.contradictions.add('dewPointAboveTemperature');
+    return NaN;
+  }
+  if (Math.abs(relativeHumidityPct(temperatureC, dewPointC) - humidityPct) > humiditySlackPct) {
+    table.contradictions.add('humidityAgainstDewPoint');
+    return NaN;
+  }
+  return dewPointC;
+}

@@ -1,0 +1,182 @@
+import { prepareFoliage } from '../atmosphere/foliage/index.ts';
+import { prepareInversion } from '../atmosphere/inversion/index.ts';
+import { stationPressureKpa } from '../atmosphere/pressure.ts';
+import { radiationUnderCloudWm2 } from '../atmosphere/radiation/kasten-czeplak.ts';
+import { saturationVapourPressureKpa } from '../atmosphere/saturation-vapour-pressure.ts';
+import type { StabilityClass } from '../atmosphere/stability-turner.ts';
+import { deltaTC } from '../atmosphere/wet-bulb.ts';
+import { sunAltitudeDeg } from '../sun/sun.ts';
+import type { BeeKind, ForecastHour, Reading, Site } from './case.ts';
+import { prepareBees } from './prepare-bees.ts';
+import { prepareDirection, type DirectionSteps } from './prepare-direction.ts';
+import { hourMs, tableOf, type HourTable } from './hours.ts';
+import { morningOf, stepMs, type Morning } from './morning.ts';
+import { learnSiteWindFactor, type SiteWindFactor } from './site-factor.ts';
+
+/** Hours of forecast looked at after local noon: the longest dry spell a plan may ask for. */
+const hoursAfterNoon = 73;
+/** Given radiation may exceed the clear-sky formula by so much (thin air, cloud edges); beyond it the value contradicts the sun. */
+const mostOverClearSky = 1.3;
+const stepsPerHour = hourMs / stepMs;
+
+export interface InversionStep {
+  likelihood: number | null;
+  stabilityClass: StabilityClass | null;
+  evidence: string[];
+}
+
+/**
+ * One morning's weather on 5-minute steps, ready to be judged by any number of plans. NaN = unknown.
+ * Hourly states are interpolated linearly, wind direction as a vector; rain, its chance and gusts stay hourly.
+ */
+export interface PreparedMorning {
+  morning: Morning;
+  hours: HourTable;
+  siteFactor: SiteWindFactor | null;
+  temperatureC: Float64Array;
+  /** Wind at 10 m, with the site's learned factor. */
+  windMs: Float64Array;
+  /** Gust at 10 m: the hour's greatest, at least the mean wind. A site factor above 1 raises it, one below 1 does not lower it. */
+  gustMs: Float64Array;
+  direction: DirectionSteps;
+  deltaTC: Float64Array;
+  radiationWm2: Float64Array;
+  /** Steps whose radiation was estimated from the sun's altitude and cloud [kastenCzeplak1980]. */
+  radiationIsEstimated: boolean;
+  inversion: InversionStep[];
+  inversionLikelihood: Float64Array;
+  foliageWetness: Float64Array;
+  foliageDriesAt(afterMs: number): number | null;
+  /** Activity as shown, and as judged: where radiation is missing the judged one takes the brightest sky the sun allows. */
+  bees: Readonly<Record<BeeKind, { shown: Float64Array; judged: Float64Array }>>;
+}
+
+/** What a morning is prepared from. */
+export interface Weather {
+  site: Site;
+  /** Local calendar date, `YYYY-MM-DD`. */
+  date: string;
+  /** In order, one per hour, start of hour in UTC. */
+  hours: readonly ForecastHour[];
+  readings?: readonly Reading[];
+}
+
+/** Interpolates an hourly state onto the steps; unknown wherever one of the two hours is. */
+function onSteps(morning: Morning, hourly: Float64Array, factor = 1): Float64Array {
+  const steps = new Float64Array(morning.count);
+  for (let step = 0; step < morning.count; step += 1) {
+    const grid = step + morning.offsetSteps;
+    const hour = Math.floor(grid / stepsPerHour);
+    const share = (grid % stepsPerHour) / stepsPerHour;
+    const from = hourly[hour]!;
+    steps[step] = factor * (share === 0 ? from : from + (hourly[hour + 1]! - from) * share);
+  }
+  return steps;
+}
+
+/**
+ * Prepares a morning once for all plans: sun, steps, interpolation, derived weather.
+ * @param morning the layout of the date, when it is at hand already (ensemble members share it)
+ * @throws RangeError for an unknown zone; shapes and ranges are checked by `parseCase` before
+ */
+export function prepareMorning(weather: Weather, morning: Morning = morningOf(weather.site, weather.date)): PreparedMorning {
+  const { site, hours } = weather;
+  const table = tableOf(hours, morning.firstHourMs, morning.hourCount + hoursAfterNoon);
+  const siteFactor = learnSiteWindFactor(hours, weather.readings ?? []);
+  const temperatureC = onSteps(morning, table.temperatureC);
+  const windMs = onSteps(morning, table.windMs, siteFactor?.factor ?? 1);
+  const sky = radiationOnSteps(morning, table);
+  const altitudeAt = (epochMs: number): number => sunAltitudeDeg(epochMs, site.latitude, site.longitude);
+  const inversion = onInversionSteps(morning, prepareInversion({ site, hours, sunAltitudeDegAt: altitudeAt }));
+  const foliage = prepareFoliage({ site, hours, sunAltitudeDegAt: altitudeAt });
+  const foliageWetness = new Float64Array(morning.count);
+  for (let step = 0; step < morning.count; step += 1) foliageWetness[step] = foliage.at(morning.startMs + step * stepMs).wetness ?? NaN;
+  return {
+    morning,
+    hours: table,
+    siteFactor,
+    temperatureC,
+    windMs,
+    gustMs: gustsOnSteps(morning, table, windMs, siteFactor),
+    direction: prepareDirection(morning, table, windMs),
+    deltaTC: deltaTOnSteps(morning, table, temperatureC),
+    radiationWm2: sky.radiationWm2,
+    radiationIsEstimated: sky.isEstimated,
+    inversion,
+    inversionLikelihood: Float64Array.from(inversion, ({ likelihood }) => likelihood ?? NaN),
+    foliageWetness,
+    foliageDriesAt: (afterMs) => foliage.driesAt(afterMs),
+    bees: prepareBees(morning, table, { temperatureC, windMs, radiationWm2: sky.radiationWm2, brightestWm2: sky.brightestWm2 }),
+  };
+}
+
+function onInversionSteps(morning: Morning, prepared: { at(epochMs: number): InversionStep }): InversionStep[] {
+  const steps = new Array<InversionStep>(morning.count);
+  for (let step = 0; step < morning.count; step += 1) steps[step] = prepared.at(morning.startMs + step * stepMs);
+  return steps;
+}
+
+function gustsOnSteps(morning: Morning, table: HourTable, windMs: Float64Array, siteFactor: SiteWindFactor | null): Float64Array {
+  const raise = Math.max(1, siteFactor?.factor ?? 1);
+  const gusts = new Float64Array(morning.count);
+  for (let step = 0; step < morning.count; step += 1) {
+    const gust = table.gustOfMs[Math.floor((step + morning.offsetSteps) / stepsPerHour)]! * raise;
+    // Math.max gives NaN when either is unknown: a gust cannot be told without the wind that it is checked against.
+    gusts[step] = Math.max(gust, windMs[step]!);
+  }
+  return gusts;
+}
+
+function deltaTOnSteps(morning: Morning, table: HourTable, temperatureC: Float64Array): Float64Array {
+  const pressureKpa = stationPressureKpa(morning.site.elevationM);
+  const dewPoint = onSteps(morning, table.dewPointC);
+  const deltaT = new Float64Array(morning.count);
+  for (let step = 0; step < morning.count; step += 1) deltaT[step] = deltaTC(temperatureC[step]!, saturationVapourPressureKpa(dewPoint[step]!), pressureKpa);
+  return deltaT;
+}
+
+interface Sky {
+  radiationWm2: Float64Array;
+  /** The given radiation, or the most that the sun allows where none is given. */
+  brightestWm2: Float64Array;
+  isEstimated: boolean;
+}
+
+/** An hour's mean radiation is spread over its steps in proportion to the clear-sky radiation, so that the hour's sum stays. */
+function radiationOnSteps(morning: Morning, table: HourTable): Sky {
+  const cloud = onSteps(morning, table.cloudPct);
+  const clearness = new Float64Array(morning.hourCount);
+  for (let hour = 0; hour < morning.hourCount; hour += 1) clearness[hour] = clearnessOf(table, hour, morning.clearSkyOfHourWm2[hour]!);
+  const radiationWm2 = new Float64Array(morning.count);
+  const brightestWm2 = new Float64Array(morning.count);
+  let isEstimated = false;
+  for (let step = 0; step < morning.count; step += 1) {
+    const hour = Math.floor((step + morning.offsetSteps) / stepsPerHour);
+    const clear = morning.clearSkyWm2[step]!;
+    const known = clearness[hour]! * clear;
+    if (!Number.isNaN(known)) {
+      radiationWm2[step] = known;
+      brightestWm2[step] = known;
+      continue;
+    }
+    radiationWm2[step] = radiationUnderCloudWm2(morning.sunAltitudeDeg[step]!, cloud[step]!);
+    brightestWm2[step] = mostOverClearSky * clear;
+    if (clear > 5) isEstimated = true;
+  }
+  return { radiationWm2, brightestWm2, isEstimated };
+}
+
+/** Share of the clear-sky radiation in an hour; NaN when it is unknown or contradicts the sun. */
+function clearnessOf(table: HourTable, hour: number, clearWm2: number): number {
+  const given = table.radiationOfWm2[hour]!;
+  if (clearWm2 < 1 && given > 60) {
+    table.contradictions.add('sunlightAtNight');
+    return NaN;
+  }
+  if (given > mostOverClearSky * clearWm2 + 150) {
+    table.contradictions.add('sunlightTooStrong');
+    return NaN;
+  }
+  if (clearWm2 < 1) return Number.isNaN(given) ? NaN : 1;
+  return Math.min(mostOverClearSky, given / clearWm2);
+}

@@ -1,0 +1,124 @@
+import { limitNames, type LimitName } from './answer.ts';
+import { limitJudges } from './limits/index.ts';
+import type { PreparedMorning } from './prepare.ts';
+import type { PlanToJudge, Track } from './track.ts';
+import { stepMinutes } from './morning.ts';
+import { fitInto, minutesOf, runsOf, type Fit, type StepRun } from './windows.ts';
+
+/** A judged plan in compact form: what the answer, its sentences and an ensemble's count are made from. */
+export interface Judgement {
+  morning: PreparedMorning;
+  plan: PlanToJudge;
+  neededMinutes: number;
+  tracks: Track[];
+  /** Least headroom of the hard limits per step; −2 where none is told. */
+  least: Float64Array;
+  /** Index of the track with the least headroom per step; −1 where none is told. */
+  leastTrack: Int8Array;
+  /** 1 where a hard limit cannot be told and none is known to fail. */
+  isUntold: Uint8Array;
+  runs: StepRun[];
+  /** One per run; null where the job does not fit. */
+  fits: (Fit | null)[];
+  /** The fit with the most headroom, the earliest of equals. */
+  chosen: Fit | null;
+  verdict: 'go' | 'hold';
+  enoughToTell: boolean;
+  bindingLimit: LimitName | 'time' | 'data' | null;
+}
+
+/**
+ * Judges a plan on a prepared morning. Cost grows with steps × limits; the morning is shared by all plans.
+ * A go needs a run of steps in which every hard limit is known and has headroom ≥ 0, long enough for job and reserve.
+ * Too little is known when a hold would turn into a go if every unknown value were good.
+ */
+export function decide(morning: PreparedMorning, plan: PlanToJudge): Judgement {
+  const tracks: Track[] = [];
+  for (const name of limitNames) {
+    const track = limitJudges[name](morning, plan);
+    if (track) tracks.push(track);
+  }
+  const count = morning.morning.count;
+  const least = new Float64Array(count);
+  const leastTrack = new Int8Array(count).fill(-1);
+  const isUntold = new Uint8Array(count);
+  const isOpen = new Uint8Array(count);
+  const hasHardTrack = scan(tracks, least, leastTrack, isUntold);
+  for (let step = 0; step < count; step += 1) isOpen[step] = hasHardTrack && isUntold[step] === 0 && least[step]! >= 0 ? 1 : 0;
+  const neededMinutes = plan.minutesNeeded + plan.reserveMinutes;
+  const runs = runsOf(isOpen);
+  const fits = runs.map((run) => fitInto(run, least, neededMinutes));
+  let chosen: Fit | null = null;
+  for (const fit of fits) if (fit && (!chosen || fit.headroom > chosen.headroom)) chosen = fit;
+  const enoughToTell = chosen !== null || (hasHardTrack && !couldFit(least, isUntold, neededMinutes));
+  const judgement: Judgement = { morning, plan, neededMinutes, tracks, least, leastTrack, isUntold, runs, fits, chosen, verdict: chosen ? 'go' : 'hold', enoughToTell, bindingLimit: null };
+  judgement.bindingLimit = bindingOf(judgement);
+  return judgement;
+}
+
+/** Fills least headroom and unknown steps from the hard limits; false when no limit is hard. */
+function scan(tracks: Track[], least: Float64Array, leastTrack: Int8Array, isUntold: Uint8Array): boolean {
+  let hasHard = false;
+  least.fill(Infinity);
+  for (const [index, track] of tracks.entries()) {
+    if (!track.isHard) continue;
+    hasHard = true;
+    const { headroom } = track;
+    for (let step = 0; step < headroom.length; step += 1) {
+      const at = headroom[step]!;
+      if (Number.isNaN(at)) isUntold[step] = 1;
+      else if (at < least[step]!) {
+        least[step] = at;
+        leastTrack[step] = index;
+      }
+    }
+  }
+  for (let step = 0; step < least.length; step += 1) {
+    if (least[step] === Infinity) least[step] = -2;
+    else if (least[step]! < 0) isUntold[step] = 0;
+  }
+  return hasHard;
+}
+
+/** True when the job would fit if every unknown step were open. */
+function couldFit(least: Float64Array, isUntold: Uint8Array, neededMinutes: number): boolean {
+  const isPossible = new Uint8Array(least.length);
+  let unknowns = 0;
+  for (let step = 0; step < least.length; step += 1) {
+    unknowns += isUntold[step]!;
+    isPossible[step] = isUntold[step] === 1 || least[step]! >= 0 ? 1 : 0;
+  }
+  return unknowns > 0 && runsOf(isPossible).some((run) => minutesOf(run) >= neededMinutes);
+}
+
+/**
+ * The limit with the least headroom: over job and reserve on a go; on a hold at the morning's best step, unless the longest window
+ * is closed by a limit, which then binds.
+ */
+function bindingOf({ chosen, enoughToTell, tracks, least, leastTrack, isUntold, runs, neededMinutes, morning }: Judgement): Judgement['bindingLimit'] {
+  if (!enoughToTell) return 'data';
+  const nameOf = (step: number): Judgement['bindingLimit'] => (isUntold[step] === 1 ? 'data' : (tracks[leastTrack[step] ?? -1]?.limit ?? null));
+  if (chosen) {
+    const from = Math.round(chosen.bestStartMin / stepMinutes);
+    const to = Math.min(chosen.to, from + Math.max(1, Math.ceil(neededMinutes / stepMinutes)));
+    return nameOf(lowestStep(least, from, to));
+  }
+  if (morning.morning.count * stepMinutes < neededMinutes || morning.morning.count === 0) return 'time';
+  const longest = longestRun(runs);
+  if (longest) return nameOf(longest.to < least.length ? longest.to : longest.from - 1) ?? 'time';
+  return nameOf(highestStep(least));
+}
+
+export const longestRun = (runs: readonly StepRun[]): StepRun | null => runs.reduce<StepRun | null>((longest, run) => (longest && longest.to - longest.from >= run.to - run.from ? longest : run), null);
+
+export function lowestStep(least: Float64Array, from: number, to: number): number {
+  let lowest = from;
+  for (let step = from + 1; step < to; step += 1) if (least[step]! < least[lowest]!) lowest = step;
+  return lowest;
+}
+
+export function highestStep(least: Float64Array): number {
+  let highest = 0;
+  for (let step = 1; step < least.length; step += 1) if (least[step]! > least[highest]!) highest = step;
+  return highest;
+}
