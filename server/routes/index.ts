@@ -18,8 +18,8 @@ export function registerRoutes(register: Register, services: Services, parts: Pa
   systemRoutes(register, services, parts);
   demoRoutes(register, services, parts);
   accountRoutes(register, services);
-  farmRoutes(register, services);
-  productRoutes(register, services);
+  farmRoutes(register, services, parts);
+  productRoutes(register, services, parts);
   planRoutes(register, services, parts);
   morningRoutes(register, services, parts);
   noticeRoutes(register, services, parts);

@@ -30,7 +30,7 @@ const dayMs = 86_400_000;
  */
 export function localInstant(date: string, time: string, timeZone: string): Date {
   const local = DateTime.fromISO(`${date}T${time}:00`, { zone: timeZone });
-  return DateTime.min(...local.getPossibleOffsets()).toJSDate();
+  return new Date(Math.min(...local.getPossibleOffsets().map((possible) => possible.toMillis())));
 }
 
 const shifted = (date: string, days: number): string => DateTime.fromISO(date, { zone: 'utc' }).plus({ days }).toISODate()!;

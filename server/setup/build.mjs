@@ -1,10 +1,11 @@
-import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { existsSync, readFileSync, readdirSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { StartError } from './start-error.mjs';
+import { oneAtATime } from './only-one.mjs';
+import { runProgram } from './run-program.mjs';
+import { SetupError, saysDiskFull, sentenceOf } from './setup-error.mjs';
 
-const sources = ['src', 'shared', 'index.html', 'vite.config.ts', 'tailwind.config.ts', 'package-lock.json'];
+const sources = ['src', 'shared', 'index.html', 'vite.config.ts', 'tailwind.config.ts', 'tsconfig.json', 'package-lock.json'];
 
 function hashOf(root) {
   const hash = createHash('sha256');
@@ -20,21 +21,24 @@ function hashOf(root) {
   return hash.digest('hex');
 }
 
-/** Builds the client into dist/ when its sources changed since the last build. Resolves to whether it did. */
-export async function ensureClient(root) {
+/** Builds the client into dist/ when its sources changed since the last build; whether it did. */
+export async function ensureClient(root, stop) {
   const stamp = join(root, 'dist', '.sources');
   const wanted = hashOf(root);
-  if (existsSync(stamp) && readFileSync(stamp, 'utf8') === wanted) return false;
-  console.log('Building the client …');
-  const output = [];
-  const status = await new Promise((resolve, reject) => {
-    const child = spawn(process.execPath, [join(root, 'node_modules/vite/bin/vite.js'), 'build', '--logLevel', 'warn'], { cwd: root, stdio: ['ignore', 'pipe', 'pipe'] });
-    child.stdout.on('data', (chunk) => output.push(chunk));
-    child.stderr.on('data', (chunk) => output.push(chunk));
-    child.once('error', reject);
-    child.once('exit', resolve);
+  const isBuilt = () => existsSync(stamp) && readFileSync(stamp, 'utf8') === wanted;
+  if (isBuilt()) return false;
+  return oneAtATime(root, stop, async () => {
+    if (isBuilt()) return false;
+    console.log('Building the client …');
+    // Whatever mode the caller is in, people get React's production build.
+    const env = { ...process.env, NODE_ENV: 'production' };
+    const { status, output } = await runProgram(process.execPath, [join(root, 'node_modules/vite/bin/vite.js'), 'build', '--logLevel', 'warn'], { cwd: root, env, stop });
+    if (status !== 0) throw new SetupError(saysDiskFull(output) ? 'The disk is full: the client could not be built; make room and start again.' : `The client could not be built:\n${output.trim()}`);
+    try {
+      writeFileSync(stamp, wanted);
+    } catch (error) {
+      throw sentenceOf(error, `write ${stamp}`);
+    }
+    return true;
   });
-  if (status !== 0) throw new StartError(`The client could not be built:\n${Buffer.concat(output).toString().trim()}`);
-  writeFileSync(stamp, wanted);
-  return true;
 }

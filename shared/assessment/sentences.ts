@@ -50,8 +50,7 @@ export function headlineOf(answer: AssessmentAnswer, options: SentenceOptions): 
   for (const kind of leadingKinds) {
     const reason = answer.reasons.find((candidate) => candidate.kind === kind);
     if (!reason) continue;
-    const sentence = retell(reason, answer, options);
-    return headlines.hold(sentence.charAt(0).toLowerCase() + sentence.slice(1));
+    return headlines.hold(reason.key === undefined ? reason.text : `${clauseOf(reason.key as MessageKey, reason.params, formatsOf(answer, options), options.language ?? 'en')}.`);
   }
   return headlines.bareHold();
 }

@@ -1,0 +1,105 @@
+import { activityBand } from '../pollinators/activity.ts';
+import type { UnitSystem } from '../units/units.ts';
+import type { AssessmentAnswer, AssessmentStep, LimitAtStep, Reason, SprayWindow } from './answer.ts';
+import type { BeeKind } from './case.ts';
+import { isoAt } from './failing.ts';
+import { formatsFor } from './formats.ts';
+import { stepMs } from './morning.ts';
+import type { PreparedMorning } from './prepare.ts';
+import { reasonsOf } from './reasons.ts';
+import { sentenceOf, type Language } from './sentences.ts';
+import type { Track } from './track.ts';
+import type { Judgement } from './verdict.ts';
+
+/** In which words the reasons are told; any other can be had from their key and params by `retell`. */
+export interface AnswerOptions {
+  units?: UnitSystem;
+  language?: Language;
+}
+
+/** Digits kept of a value; headroom is rounded DOWN, so that it never crosses its limit. */
+const valueScale = 1e6;
+const headroomScale = 1e4;
+
+const isoOf = (ms: number | null): string | null => (ms === null ? null : new Date(ms).toISOString());
+const rounded = (value: number): number | null => (Number.isNaN(value) ? null : Math.round(value * valueScale) / valueScale);
+
+/** Turns a judgement into the answer of the contract; the steps are built when they are first read. */
+export function answerOf(judgement: Judgement, options: AnswerOptions = {}): AssessmentAnswer {
+  const { morning } = judgement;
+  const { morning: layout } = morning;
+  const formats = formatsFor({ units: options.units ?? 'us', timeZone: layout.site.timeZone, date: layout.date });
+  const reasons = reasonsOf(judgement).map((bare): Reason => ({ limit: bare.limit, kind: bare.kind, at: bare.at, text: sentenceOf(bare, formats, options.language), key: bare.key, params: bare.params as Record<string, unknown> }));
+  let steps: AssessmentStep[] | null = null;
+  return {
+    verdict: judgement.verdict,
+    enoughToTell: judgement.enoughToTell,
+    bindingLimit: judgement.bindingLimit,
+    reasons,
+    windows: windowsOf(judgement),
+    sun: {
+      civilDawn: isoOf(layout.sun.civilDawnMs),
+      sunrise: isoOf(layout.sun.sunriseMs),
+      solarNoon: isoOf(layout.sun.solarNoonMs),
+      sunset: isoOf(layout.sun.sunsetMs),
+      localNoon: new Date(layout.localNoonMs).toISOString(),
+    },
+    beeActivity: bandsOf(judgement),
+    siteWindFactor: morning.siteFactor,
+    get steps() {
+      return (steps ??= stepsOf(judgement));
+    },
+  };
+}
+
+function windowsOf(judgement: Judgement): SprayWindow[] {
+  const { startMs } = judgement.morning.morning;
+  return judgement.runs.map((run, index) => {
+    const fit = judgement.fits[index];
+    return {
+      start: isoAt(judgement, run.from),
+      end: isoAt(judgement, run.to),
+      minutes: ((run.to - run.from) * stepMs) / 60_000,
+      bestStart: fit ? new Date(startMs + fit.bestStartMin * 60_000).toISOString() : null,
+      latestStart: fit ? new Date(startMs + Math.floor(fit.latestStartMin) * 60_000).toISOString() : null,
+    };
+  });
+}
+
+function bandsOf({ plan, morning }: Judgement): NonNullable<AssessmentAnswer['beeActivity']> {
+  const { count, startMs } = morning.morning;
+  const timeMs = Float64Array.from({ length: count }, (_, step) => startMs + step * stepMs);
+  const bands: NonNullable<AssessmentAnswer['beeActivity']> = {};
+  for (const kind of plan.limits.pollinators?.kinds ?? []) {
+    const band = activityBand(timeMs, morning.bees[kind].judged, stepMs);
+    bands[kind] = { possibleFrom: isoOf(band.possibleFromMs), likelyFrom: isoOf(band.likelyFromMs), likelyUntil: isoOf(band.likelyUntilMs), possibleUntil: isoOf(band.possibleUntilMs) };
+  }
+  return bands;
+}
+
+function stepsOf(judgement: Judgement): AssessmentStep[] {
+  const { morning, tracks, plan } = judgement;
+  const times = morning.morning.times();
+  const kinds = plan.limits.pollinators?.kinds ?? [];
+  return times.map((time, step) => {
+    const limits: AssessmentStep['limits'] = {};
+    for (const track of tracks) limits[track.limit] = atStep(track, step);
+    return { time, sunAltitudeDeg: Math.round(morning.morning.sunAltitudeDeg[step]! * 1e4) / 1e4, limits, inversion: morning.inversion[step]!, pollinators: beesAt(morning, kinds, step) };
+  });
+}
+
+function atStep(track: Track, step: number): LimitAtStep {
+  const headroom = track.headroom[step]!;
+  return {
+    value: rounded(track.value[step]!),
+    limit: rounded(typeof track.bound === 'number' ? track.bound : track.bound[step]!),
+    headroom: Number.isNaN(headroom) ? null : Math.floor(headroom * headroomScale) / headroomScale,
+    kind: track.isHard ? 'hard' : 'advice',
+  };
+}
+
+function beesAt(morning: PreparedMorning, kinds: readonly BeeKind[], step: number): AssessmentStep['pollinators'] {
+  const bees: AssessmentStep['pollinators'] = {};
+  for (const kind of kinds) bees[kind] = rounded(morning.bees[kind].shown[step]!);
+  return bees;
+}

@@ -1,0 +1,35 @@
+import { useState, type ReactNode } from 'react';
+import { useNavigate } from 'react-router-dom';
+import type { FormPart } from '../../lib/forms/form-part.ts';
+import { PageHeading, useToast } from '../index.ts';
+
+interface EditorProps<Item extends { name: string; version: number }, Body> {
+  title: string;
+  /** What is edited; null for a new one. */
+  stored: Item | null;
+  save: (body: Body & { version?: number }) => Promise<Item>;
+  /** Where to go once it is saved. */
+  after: (item: Item) => string;
+  cancelTo: string;
+  children: (part: FormPart<Item, Body>) => ReactNode;
+}
+
+/** The page of a form: saves, says so, and leads on; an edit tells the server which copy it was made from. */
+export function RecordEditor<Item extends { name: string; version: number }, Body>({ title, stored, save, after, cancelTo, children }: EditorProps<Item, Body>) {
+  const navigate = useNavigate();
+  const toast = useToast();
+  const [opened] = useState(stored);
+
+  async function send(body: Body) {
+    const item = await save(opened ? { ...body, version: opened.version } : body);
+    toast(opened ? `${item.name} is saved.` : `${item.name} is added.`);
+    await navigate(after(item), { replace: true });
+  }
+
+  return (
+    <>
+      <PageHeading title={title} />
+      {children({ stored: opened, save: send, cancelTo })}
+    </>
+  );
+}

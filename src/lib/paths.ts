@@ -1,0 +1,64 @@
+/** Every address of the client once: as the router's pattern, and as a builder of links. */
+export const patterns = {
+  home: '/',
+  signIn: '/sign-in',
+  signUp: '/sign-up',
+  confirm: '/confirm',
+  forgot: '/forgot',
+  reset: '/reset',
+  invitation: '/invitation',
+  account: '/account',
+  newFarm: '/farms/new',
+  farm: '/farms/:farmId',
+  morning: 'mornings/:date',
+  plans: 'plans',
+  shelf: 'shelf',
+  settings: 'farm',
+  notices: 'notices',
+  people: 'people',
+  demo: '/demo',
+} as const;
+
+/** Lists of things that a farm keeps, and where each thing has its pages. */
+function kept(base: (farmId: string) => string) {
+  return {
+    list: base,
+    create: (farmId: string) => `${base(farmId)}/new`,
+    one: (farmId: string, id: string) => `${base(farmId)}/${id}`,
+    edit: (farmId: string, id: string) => `${base(farmId)}/${id}/edit`,
+  };
+}
+
+const farm = (farmId: string) => `/farms/${farmId}`;
+
+export const paths = {
+  home: () => '/',
+  signIn: (next?: string) => (next && next !== '/' ? `/sign-in?next=${encodeURIComponent(next)}` : '/sign-in'),
+  signUp: () => '/sign-up',
+  forgot: () => '/forgot',
+  account: () => '/account',
+  newFarm: () => '/farms/new',
+  daybreak: farm,
+  morning: (farmId: string, date: string) => `${farm(farmId)}/mornings/${date}`,
+  plans: kept((farmId) => `${farm(farmId)}/plans`),
+  shelf: kept((farmId) => `${farm(farmId)}/shelf`),
+  settings: (farmId: string) => `${farm(farmId)}/farm`,
+  editSettings: (farmId: string) => `${farm(farmId)}/farm/edit`,
+  blocks: kept((farmId) => `${farm(farmId)}/farm/blocks`),
+  places: kept((farmId) => `${farm(farmId)}/farm/places`),
+  sprayers: kept((farmId) => `${farm(farmId)}/farm/sprayers`),
+  notices: (farmId: string) => `${farm(farmId)}/notices`,
+  devices: (farmId: string) => `${farm(farmId)}/notices/devices`,
+  hooks: (farmId: string) => `${farm(farmId)}/notices/hooks`,
+  people: (farmId: string) => `${farm(farmId)}/people`,
+  audit: (farmId: string) => `${farm(farmId)}/people/changes`,
+  demoClock: () => '/demo/clock',
+  demoPhone: () => '/demo/phone',
+  demoMailbox: () => '/demo/mailbox',
+  demoHooks: () => '/demo/hooks',
+};
+
+/** A way back into the application that came in by the address: never to another site. */
+export function safeNext(next: string | null): string {
+  return next && /^\/(?![/\\])/.test(next) ? next : '/';
+}
