@@ -2,12 +2,12 @@ import { drift, rise, stream, uniform } from './noise.ts';
 import type { View } from './view.ts';
 
 const hourMs = 3_600_000;
-/** On the mean one front every three and a half days. */
-const spacingH = 84;
+/** On the mean one front in so many hours; no multiple of a day, so that fronts come at any time of it. */
+const spacingH = 64.3;
 /** Fronts come from the west: about this much later per degree of longitude (10 m/s at middle latitudes; common practice, no source). */
 const delayHPerDeg = 2.2;
 /** No forecast puts a front further off than this, hours; it also keeps neighbouring fronts in order. */
-const furthestShiftH = 12;
+const furthestShiftH = 11;
 
 interface Front {
   index: number;
@@ -52,10 +52,10 @@ export function createSynoptic(seed: number, longitude: number): (atMs: number, 
     const strength = uniform(keys.strength, index) ** 0.9;
     const made: Front = {
       index,
-      passageMs: ((index + 0.5) * spacingH + (uniform(keys.time, index) - 0.5) * 56) * hourMs + delayMs,
+      passageMs: ((index + 0.5) * spacingH + (uniform(keys.time, index) - 0.5) * 40) * hourMs + delayMs,
       strength,
-      rainMmPerH: strength < 0.3 ? 0 : 0.4 + 2 * uniform(keys.rain, index) * strength,
-      rainHalfWidthH: 1.5 + 4 * strength * uniform(keys.width, index),
+      rainMmPerH: strength < 0.18 ? 0 : 0.3 + 1.3 * uniform(keys.rain, index) * strength,
+      rainHalfWidthH: 2.5 + 7.5 * strength * uniform(keys.width, index),
       bearingBeforeDeg: 195 + 50 * (uniform(keys.before, index) - 0.5),
       bearingAfterDeg: 305 + 50 * (uniform(keys.after, index) - 0.5),
     };
@@ -67,12 +67,12 @@ export function createSynoptic(seed: number, longitude: number): (atMs: number, 
 
   return (atMs, view) => {
     const middle = Math.floor((atMs - delayMs) / hourMs / spacingH);
-    // Fronts lie at least 28 h from each other's cells, so three of them are all that is felt at one time.
+    // Fronts lie at most 20 h from the middle of their cells, so three of them are all that is felt at one time.
     const near = [front(middle - 1), front(middle), front(middle + 1)];
     const taus = near.map((one) => passedH(one, atMs, view));
     const atH = atMs / hourMs;
     const felt: Synoptic = {
-      gradientWindMs: 4.1 + 1.3 * drift(keys.wind, atH / 30),
+      gradientWindMs: 4.9 + 1.9 * drift(keys.wind, atH / 30),
       windFromDeg: 0,
       cloudFraction: 0.3 + 0.2 * drift(keys.cloud, atH / 22) + 0.1 * drift(keys.scud, atH / 5),
       airMassC: 1.8 * drift(keys.air, atH / 90),
@@ -115,7 +115,7 @@ export function createSynoptic(seed: number, longitude: number): (atMs: number, 
 
 /** What one front does to wind, cloud and air at so many hours behind its passage. */
 function feel(felt: Synoptic, { strength }: Front, tauH: number): void {
-  felt.gradientWindMs += (1.2 + 6.2 * strength) * bump(tauH, 16, 20);
+  felt.gradientWindMs += (1 + 7 * strength) * bump(tauH, 20, 30);
   felt.cloudFraction += (0.35 + 0.75 * strength) * bump(tauH, 22, 9);
   felt.airMassC += strength * (3.5 * bump(Math.min(tauH, 0), 34, 1) * (1 - rise(-1, 5, tauH)) - 5 * rise(-1, 8, tauH) * (1 - rise(20, 75, tauH)));
   felt.drynessC += strength * (3 * rise(2, 12, tauH) * (1 - rise(18, 48, tauH)) - 2.5 * bump(tauH, 14, 6));

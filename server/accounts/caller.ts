@@ -3,20 +3,14 @@ import type { Endpoint } from '../../shared/api/endpoint.ts';
 import { may, type Role } from '../../shared/rules/authorization.ts';
 import { HttpProblem, notFound } from '../http/problem.ts';
 import type { Services } from '../services.ts';
-import { sessionOf } from './sessions.ts';
+import { sessionOf, type SignedIn } from './sessions.ts';
 
 /** Who asks, and what they are at the farm of the address. */
-export interface Caller {
-  userId: string;
-  sessionId: string;
-  name: string;
-  email: string;
+export interface Caller extends Omit<SignedIn, 'roles'> {
   /** At the farm of the address; null where the address names none. */
   role: Role | null;
   farmId: string | null;
 }
-
-const uuid = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/i;
 
 /**
  * Decides whether the request may go on, from the endpoint's line in the authorization table.
@@ -28,13 +22,11 @@ export async function authorize(endpoint: Endpoint, request: Request, response: 
   if (access === 'public' || access === 'demo' || access === 'signature') return null;
   const session = await sessionOf(request, response, services);
   if (!session) throw new HttpProblem(401, 'Sign in, then try again.');
-  if (access === 'signedIn') return { ...session, role: null, farmId: null };
-  const farmId = request.params['farmId'];
-  if (typeof farmId !== 'string' || !uuid.test(farmId)) throw notFound();
-  const membership = await services.models.memberships.findOne({ where: { farmId, userId: session.userId }, raw: true });
-  if (!membership) throw notFound();
-  if (!may(membership.role, access.action, access.resource)) {
-    throw new HttpProblem(403, `As ${membership.role} of this farm you may not do this; ask an owner.`);
-  }
-  return { ...session, role: membership.role, farmId };
+  const { roles, ...person } = session;
+  if (access === 'signedIn') return { ...person, role: null, farmId: null };
+  const farmId = String(request.params['farmId']);
+  const role = roles.get(farmId);
+  if (!role) throw notFound();
+  if (!may(role, access.action, access.resource)) throw new HttpProblem(403, `As ${role} of this farm you may not do this; ask an owner.`);
+  return { ...person, role, farmId };
 }

@@ -1,7 +1,13 @@
 import type { Request, Response } from 'express';
-import { Op } from 'sequelize';
+import { Op, type Transaction } from 'sequelize';
 import type { Services } from '../services.ts';
-import { createLucia, sessionIdHash } from './lucia.ts';
+import { createLucia, sessionIdHash, type SessionPerson } from './lucia.ts';
+
+/** Who a request's cookie stands for. */
+export interface SignedIn extends SessionPerson {
+  userId: string;
+  sessionId: string;
+}
 
 const kept = new WeakMap<Services, ReturnType<typeof createLucia>>();
 
@@ -12,7 +18,7 @@ function luciaOf(services: Services): ReturnType<typeof createLucia> {
 }
 
 /** Who a request's cookie stands for; null when nobody. Renews the cookie when its session was renewed. */
-export async function sessionOf(request: Request, response: Response, services: Services): Promise<{ userId: string; sessionId: string; name: string; email: string } | null> {
+export async function sessionOf(request: Request, response: Response, services: Services): Promise<SignedIn | null> {
   const lucia = luciaOf(services);
   const id = lucia.readSessionCookie(request.headers.cookie ?? '');
   if (!id) return null;
@@ -22,12 +28,14 @@ export async function sessionOf(request: Request, response: Response, services: 
     return null;
   }
   if (session.fresh) response.append('Set-Cookie', lucia.createSessionCookie(session.id).serialize());
-  return { userId: user.id, sessionId: session.id, name: user.name, email: user.email };
+  const { id: userId, name, email, emailConfirmed, roles } = user;
+  return { userId, sessionId: session.id, name, email, emailConfirmed, roles };
 }
 
-/** Opens a session and sets its cookie. */
+/** Opens a session and sets its cookie; clears away sessions that have run out, anyone's. */
 export async function openSession(services: Services, userId: string, response: Response): Promise<void> {
   const lucia = luciaOf(services);
+  await lucia.deleteExpiredSessions();
   const session = await lucia.createSession(userId, {});
   response.append('Set-Cookie', lucia.createSessionCookie(session.id).serialize());
 }
@@ -40,6 +48,6 @@ export async function closeSession(services: Services, sessionId: string, respon
 }
 
 /** Ends every session of a person but the one named; all of them when none is. */
-export async function closeOtherSessions({ models }: Services, userId: string, exceptSessionId: string | null): Promise<void> {
-  await models.sessions.destroy({ where: { userId, ...(exceptSessionId ? { idHash: { [Op.ne]: sessionIdHash(exceptSessionId) } } : {}) } });
+export async function closeOtherSessions({ models }: Services, userId: string, exceptSessionId: string | null, transaction: Transaction): Promise<void> {
+  await models.sessions.destroy({ where: { userId, ...(exceptSessionId ? { idHash: { [Op.ne]: sessionIdHash(exceptSessionId) } } : {}) }, transaction });
 }

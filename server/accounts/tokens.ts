@@ -13,10 +13,16 @@ export const hashOfToken = (token: string): string => createHash('sha256').updat
 
 const hoursValid = { confirm: 72, reset: 2 } as const;
 
+/** Makes every open token of a purpose good no more. */
+export async function endTokens({ models, clock }: Services, userId: string, purpose: OneTimeTokenRow['purpose'], transaction: Transaction): Promise<void> {
+  await models.oneTimeTokens.update({ usedAt: clock.now() }, { where: { userId, purpose, usedAt: null }, transaction });
+}
+
 /** Makes a token that is good once; earlier ones of the same purpose are good no more. */
-export async function issueToken({ models, clock }: Services, userId: string, purpose: OneTimeTokenRow['purpose'], transaction: Transaction): Promise<{ token: string; expiresAt: Date }> {
+export async function issueToken(services: Services, userId: string, purpose: OneTimeTokenRow['purpose'], transaction: Transaction): Promise<{ token: string; expiresAt: Date }> {
+  const { models, clock } = services;
   const now = clock.now();
-  await models.oneTimeTokens.update({ usedAt: now }, { where: { userId, purpose, usedAt: null }, transaction });
+  await endTokens(services, userId, purpose, transaction);
   const { token, tokenHash } = newToken();
   const expiresAt = new Date(now.getTime() + hoursValid[purpose] * 3_600_000);
   await models.oneTimeTokens.create({ tokenHash, userId, purpose, expiresAt, usedAt: null, createdAt: now }, { transaction });

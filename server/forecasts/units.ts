@@ -27,4 +27,8 @@ const conversions: Record<Quantity, Record<string, Conversion>> = {
  * How to bring a value of `unit` to the canonical unit, or null when the unit is not told or not known: then the value
  * is not known either. Namespaces such as `wmoUnit:` and `unit:` are dropped, as the agencies change them.
  */
-export const conversionFrom = (quantity: Quantity, unit: string | null | undefined): Conversion | null => conversions[quantity][unit?.slice(unit.lastIndexOf(':') + 1) ?? ''] ?? null;
+export function conversionFrom(quantity: Quantity, unit: string | null | undefined): Conversion | null {
+  const name = unit?.slice(unit.lastIndexOf(':') + 1) ?? '';
+  const known = conversions[quantity];
+  return Object.hasOwn(known, name) ? (known[name] ?? null) : null;
+}

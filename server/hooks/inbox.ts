@@ -17,26 +17,29 @@ const atOnce = 20;
 interface Row {
   source_id: string;
   message_id: string;
-  farm_id: string;
   body: string;
   tries: number;
 }
+type Taken = Row & { farm_id: string };
 
 export function createInbox(services: Services, assessor: Assessor): Inbox {
   const { sequelize, models, clock, random, log } = services;
 
-  async function take(): Promise<Row[]> {
+  async function take(): Promise<Taken[]> {
     const now = clock.now();
     return inTransaction(
       sequelize,
       async (transaction) => {
         const rows = await select<Row>(
           sequelize,
-          `SELECT m.source_id, m.message_id, s.farm_id, m.body, m.tries FROM inbound_messages m JOIN inbound_sources s ON s.id = m.source_id
-            WHERE m.processed_at IS NULL AND (m.claimed_until IS NULL OR m.claimed_until <= :now) ORDER BY m.received_at LIMIT ${atOnce} FOR UPDATE SKIP LOCKED`,
+          `SELECT source_id, message_id, body, tries FROM inbound_messages
+            WHERE processed_at IS NULL AND (claimed_until IS NULL OR claimed_until <= :now) ORDER BY received_at LIMIT ${atOnce} FOR UPDATE SKIP LOCKED`,
           { now },
           transaction,
         );
+        if (rows.length === 0) return [];
+        const sources = await models.inboundSources.findAll({ where: { id: [...new Set(rows.map((row) => row.source_id))] }, attributes: ['id', 'farmId'], transaction, raw: true });
+        const farms = new Map(sources.map((source) => [source.id, source.farmId]));
         for (const row of rows) {
           await execute(
             sequelize,
@@ -45,7 +48,7 @@ export function createInbox(services: Services, assessor: Assessor): Inbox {
             transaction,
           );
         }
-        return rows.map((row) => ({ ...row, tries: row.tries + 1 }));
+        return rows.map((row) => ({ ...row, farm_id: farms.get(row.source_id)!, tries: row.tries + 1 }));
       },
       random,
     );
@@ -58,7 +61,7 @@ export function createInbox(services: Services, assessor: Assessor): Inbox {
     return newest?.issuedAt !== null && newest?.issuedAt !== undefined && newest.issuedAt.getTime() > Date.parse(issuedAt);
   }
 
-  async function act(row: Row): Promise<string> {
+  async function act(row: Taken): Promise<string> {
     const message = JSON.parse(row.body) as InboundForecast;
     if (message.type === 'forecast.issued') {
       await assessor.assessFarm(row.farm_id, { fetch: 'now' });
@@ -70,7 +73,7 @@ export function createInbox(services: Services, assessor: Assessor): Inbox {
     return 'taken and assessed';
   }
 
-  async function handle(row: Row): Promise<void> {
+  async function handle(row: Taken): Promise<void> {
     const where = { sourceId: row.source_id, messageId: row.message_id };
     try {
       const outcome = await act(row);

@@ -1,4 +1,4 @@
-import type { Express, Request, Response } from 'express';
+import type { Express, Request, RequestHandler, Response } from 'express';
 import type { z } from 'zod';
 import { allEndpoints } from '../../shared/api/index.ts';
 import type { Endpoint } from '../../shared/api/endpoint.ts';
@@ -6,7 +6,7 @@ import type { Role } from '../../shared/rules/authorization.ts';
 import { authorize, type Caller } from '../accounts/caller.ts';
 import type { Services } from '../services.ts';
 import { HttpProblem, invalid, problemsOf, type ProblemItem } from './problem.ts';
-import { bodyReaderFor, rateLimiterFor } from './middleware.ts';
+import { bodyReaderFor, namedAddressLimiterFor, rateLimiterFor } from './middleware.ts';
 
 /** JSON text that is sent as it is: for answers kept ready in the database. */
 export class ReadyJson {
@@ -40,8 +40,21 @@ function parsePart(schema: z.ZodType, value: unknown, prefix: string, problems: 
   return undefined;
 }
 
+/** Callers as decided, from the step that decides to the step that does. */
+const callers = new WeakMap<Request, Caller | null>();
+
+const authorizeFor =
+  (endpoint: Endpoint, services: Services): RequestHandler =>
+  async (request, response, next) => {
+    // Answers are about persons and change with time: no cache keeps one without asking again.
+    response.setHeader('Cache-Control', 'private, no-cache');
+    callers.set(request, await authorize(endpoint, request, response, services));
+    next();
+  };
+
 /**
- * Registers operations as rows of authenticate → authorize → validate → do → present.
+ * Registers operations as rows of rate limit → authorize → read the body → validate → do → present.
+ * Whoever may not do a thing has no body read.
  * `finish` fails when an operation of the contract has no handler: what is described exists.
  */
 export function createRegister(app: Express, services: Services): { register: Register; finish: () => void } {
@@ -49,9 +62,9 @@ export function createRegister(app: Express, services: Services): { register: Re
   const register: Register = (endpoint, handler) => {
     if (done.has(endpoint.id)) throw new Error(`Operation ${endpoint.id} is registered twice.`);
     done.add(endpoint.id);
-    const before = [...rateLimiterFor(endpoint, services), ...bodyReaderFor(endpoint)];
+    const before = [...rateLimiterFor(endpoint, services), authorizeFor(endpoint, services), ...bodyReaderFor(endpoint), ...namedAddressLimiterFor(endpoint, services)];
     app[endpoint.method](endpoint.path, ...before, async (request, response) => {
-      const caller = await authorize(endpoint, request, response, services);
+      const caller = callers.get(request) ?? null;
       const badAddress: ProblemItem[] = [];
       const params = parsePart(endpoint.params, request.params, '', badAddress);
       if (badAddress.length > 0) throw new HttpProblem(404, 'The address names nothing that exists.');

@@ -66,7 +66,7 @@ function commonOf(notice: NoticeRow): { common: Common; named: (recipient: strin
 }
 
 /** The push of a notice to one device. */
-export function pushDelivery({ settings }: Services, notice: NoticeRow, content: NoticeContent, member: Pick<Member, 'name' | 'units' | 'language'>, device: { id: string; name: string }): NewDelivery {
+export function pushDelivery({ settings }: Services, notice: NoticeRow, content: NoticeContent, member: Pick<Member, 'name' | 'units' | 'language'>, device: { id: string; name: string }): NewDelivery & { id: string } {
   const { common, named } = commonOf(notice);
   const text = textOf(content, member);
   const tag = tagOf(notice);
@@ -136,10 +136,10 @@ function eventOf({ settings }: Services, notice: NoticeRow, content: NoticeConte
 }
 
 /** The event of a notice to one webhook. */
-export function webhookDelivery(services: Services, notice: NoticeRow, content: NoticeContent, webhook: { id: string; name: string }): NewDelivery {
+export function webhookDelivery(services: Services, notice: NoticeRow, content: NoticeContent, webhook: { id: string; name: string }): NewDelivery & { id: string } {
   const { common, named } = commonOf(notice);
   const usefulUntil = new Date(notice.dueAt.getTime() + webhookDays * 86_400_000);
-  return { ...common, usefulUntil, ...named(webhook.id, 'webhook'), channel: 'webhook', target: webhook.id, recipient: webhook.name, payload: eventOf(services, notice, content), ackTokenHash: null };
+  return { id: randomUUID(), ...common, usefulUntil, ...named(webhook.id, 'webhook'), channel: 'webhook', target: webhook.id, recipient: webhook.name, payload: eventOf(services, notice, content), ackTokenHash: null };
 }
 
 /** Puts a notice into the outbox for everyone who wished for it: each device, each confirmed address, each webhook. @returns how many deliveries */

@@ -1,10 +1,13 @@
 import { randomUUID } from 'node:crypto';
-import { accountEndpoints, type Me } from '../../shared/api/accounts.ts';
+import { UniqueConstraintError, type Transaction } from 'sequelize';
+import type { z } from 'zod';
+import { accountEndpoints, type Me, type signUpBody } from '../../shared/api/accounts.ts';
 import { audit } from '../accounts/audit.ts';
+import { inEvenTime } from '../accounts/even-time.ts';
 import { confirmLetter, knownAddressLetter, passwordChangedLetter, resetLetter } from '../accounts/letters.ts';
 import { hashPassword, passwordMatches } from '../accounts/passwords.ts';
 import { closeOtherSessions, closeSession, openSession } from '../accounts/sessions.ts';
-import { hashOfToken, issueToken, useToken } from '../accounts/tokens.ts';
+import { endTokens, hashOfToken, issueToken, useToken } from '../accounts/tokens.ts';
 import { inTransaction } from '../database/connection.ts';
 import { queueLetter } from '../delivery/letters.ts';
 import { HttpProblem, invalid } from '../http/problem.ts';
@@ -39,22 +42,44 @@ export function accountRoutes(register: Register, services: Services): void {
   const { models, sequelize, clock, settings } = services;
   const page = (path: string, token?: string) => `${settings.publicUrl}${path}${token ? `?token=${token}` : ''}`;
 
-  register(accountEndpoints.signUp, async ({ body }) => {
-    // Hashed in any case: the answer takes as long for a known address as for a new one.
-    const passwordHash = await hashPassword(body.password);
-    await inTransaction(sequelize, async (transaction) => {
+  async function sendConfirmation(userId: string, name: string, email: string, transaction: Transaction): Promise<void> {
+    const { token, expiresAt } = await issueToken(services, userId, 'confirm', transaction);
+    await queueLetter(services, transaction, { to: email, ...confirmLetter(name, page('/confirm', token)), key: `confirm ${hashOfToken(token)}`, usefulUntil: expiresAt });
+  }
+
+  /** Opens the account, or tells the owner of a known address by letter. */
+  const openAccount = ({ email, name, units, language }: z.infer<typeof signUpBody>, passwordHash: string): Promise<void> =>
+    inTransaction(sequelize, async (transaction) => {
       const now = clock.now();
-      const known = await models.users.findOne({ where: { email: body.email }, transaction });
+      const known = await models.users.findOne({ where: { email }, transaction });
       if (known) {
         const letter = knownAddressLetter(known.name, page('/sign-in'));
         await queueLetter(services, transaction, { to: known.email, ...letter, key: `known ${known.id} ${Math.floor(now.getTime() / hour)}`, usefulUntil: new Date(now.getTime() + 24 * hour) });
         return;
       }
       const id = randomUUID();
-      await models.users.create({ id, email: body.email, emailConfirmedAt: null, passwordHash, name: body.name, units: body.units, language: body.language, createdAt: now, updatedAt: now }, { transaction });
-      const { token, expiresAt } = await issueToken(services, id, 'confirm', transaction);
-      await queueLetter(services, transaction, { to: body.email, ...confirmLetter(body.name, page('/confirm', token)), key: `confirm ${hashOfToken(token)}`, usefulUntil: expiresAt });
+      await models.users.create({ id, email, emailConfirmedAt: null, passwordHash, name, units, language, createdAt: now, updatedAt: now }, { transaction });
+      await sendConfirmation(id, name, email, transaction);
     });
+
+  register(accountEndpoints.signUp, async ({ body }) => {
+    const opening = async () => {
+      const passwordHash = await hashPassword(body.password);
+      try {
+        await openAccount(body, passwordHash);
+      } catch (error) {
+        // The same address at the same moment: the other one opened the account, this one is told so by letter.
+        if (!(error instanceof UniqueConstraintError)) throw error;
+        await openAccount(body, passwordHash);
+      }
+    };
+    await inEvenTime(opening());
+    return undefined;
+  });
+
+  register(accountEndpoints.resendConfirmation, async ({ caller }) => {
+    const { userId, name, email, emailConfirmed } = signedIn(caller);
+    if (!emailConfirmed) await inTransaction(sequelize, (transaction) => sendConfirmation(userId, name, email, transaction));
     return undefined;
   });
 
@@ -91,28 +116,32 @@ export function accountRoutes(register: Register, services: Services): void {
     const { userId, sessionId } = signedIn(caller);
     const user = await models.users.findByPk(userId, { rejectOnEmpty: true });
     if (!(await passwordMatches(user.passwordHash, body.currentPassword))) throw invalid([{ path: 'currentPassword', message: 'is not your present password' }]);
-    await setPassword(userId, body.newPassword, 'password changed');
-    await closeOtherSessions(services, userId, sessionId);
+    const passwordHash = await hashPassword(body.newPassword);
+    await inTransaction(sequelize, (transaction) => setPassword(userId, passwordHash, 'password changed', sessionId, transaction));
     return undefined;
   });
 
   register(accountEndpoints.requestReset, async ({ body }) => {
-    await inTransaction(sequelize, async (transaction) => {
-      const user = await models.users.findOne({ where: { email: body.email }, transaction });
-      if (!user) return;
-      const { token, expiresAt } = await issueToken(services, user.id, 'reset', transaction);
-      await queueLetter(services, transaction, { to: user.email, ...resetLetter(user.name, page('/reset', token)), key: `reset ${hashOfToken(token)}`, usefulUntil: expiresAt });
-    });
+    await inEvenTime(
+      inTransaction(sequelize, async (transaction) => {
+        const user = await models.users.findOne({ where: { email: body.email }, transaction });
+        if (!user) return;
+        const { token, expiresAt } = await issueToken(services, user.id, 'reset', transaction);
+        await queueLetter(services, transaction, { to: user.email, ...resetLetter(user.name, page('/reset', token)), key: `reset ${hashOfToken(token)}`, usefulUntil: expiresAt });
+      }),
+    );
     return undefined;
   });
 
   register(accountEndpoints.resetPassword, async ({ body }) => {
-    const userId = await inTransaction(sequelize, (transaction) => useToken(services, body.token, 'reset', transaction));
-    if (!userId) throw badToken();
-    await setPassword(userId, body.password, 'password reset');
-    // Whoever can read the letters owns the address.
-    await models.users.update({ emailConfirmedAt: clock.now() }, { where: { id: userId, emailConfirmedAt: null } });
-    await closeOtherSessions(services, userId, null);
+    const passwordHash = await hashPassword(body.password);
+    await inTransaction(sequelize, async (transaction) => {
+      const userId = await useToken(services, body.token, 'reset', transaction);
+      if (!userId) throw badToken();
+      await setPassword(userId, passwordHash, 'password reset', null, transaction);
+      // Whoever can read the letters owns the address.
+      await models.users.update({ emailConfirmedAt: clock.now() }, { where: { id: userId, emailConfirmedAt: null }, transaction });
+    });
     return undefined;
   });
 
@@ -133,14 +162,14 @@ export function accountRoutes(register: Register, services: Services): void {
     return meOf(services, userId);
   });
 
-  async function setPassword(userId: string, password: string, what: string): Promise<void> {
-    const passwordHash = await hashPassword(password);
-    await inTransaction(sequelize, async (transaction) => {
-      const now = clock.now();
-      const user = await models.users.findByPk(userId, { transaction, rejectOnEmpty: true });
-      await user.update({ passwordHash, updatedAt: now }, { transaction });
-      await audit(services, transaction, { farmId: null, userId, what, subject: user.name });
-      await queueLetter(services, transaction, { to: user.email, ...passwordChangedLetter(user.name, page('/forgot')), key: `password ${userId} ${now.getTime()}`, usefulUntil: new Date(now.getTime() + 24 * hour) });
-    });
+  /** Sets a password, ends every other session and every open reset, and tells the person by letter: all or nothing. */
+  async function setPassword(userId: string, passwordHash: string, what: string, exceptSessionId: string | null, transaction: Transaction): Promise<void> {
+    const now = clock.now();
+    const user = await models.users.findByPk(userId, { transaction, rejectOnEmpty: true });
+    await user.update({ passwordHash, updatedAt: now }, { transaction });
+    await endTokens(services, userId, 'reset', transaction);
+    await closeOtherSessions(services, userId, exceptSessionId, transaction);
+    await audit(services, transaction, { farmId: null, userId, what, subject: user.name });
+    await queueLetter(services, transaction, { to: user.email, ...passwordChangedLetter(user.name, page('/forgot')), key: `password ${userId} ${randomUUID()}`, usefulUntil: new Date(now.getTime() + 24 * hour) });
   }
 }

@@ -43,12 +43,15 @@ export function peopleRoutes(register: Register, services: Services): void {
   });
 
   register(peopleEndpoints.invite, async ({ params: { farmId }, body, caller }) => {
-    const { userId, name } = signedIn(caller);
+    const { userId, name, emailConfirmed } = signedIn(caller);
+    if (!emailConfirmed) throw new HttpProblem(403, 'Confirm your own e-mail address first: then letters go out in your name.');
     return inTransaction(sequelize, async (transaction) => {
       const now = clock.now();
       const farm = await models.farms.findByPk(farmId, { transaction, rejectOnEmpty: true });
       const known = await models.users.findOne({ where: { email: body.email }, transaction });
       if (known && (await models.memberships.count({ where: { farmId, userId: known.id }, transaction })) > 0) throw invalid([{ path: 'email', message: 'belongs to a member of this farm already' }]);
+      // A new letter replaces an older one: only the newest link opens the door.
+      await models.invitations.update({ revokedAt: now }, { where: { farmId, email: body.email, acceptedAt: null, revokedAt: null }, transaction });
       const { token, tokenHash } = newToken();
       const invitation = await models.invitations.create(
         { id: randomUUID(), farmId, email: body.email, role: body.role, tokenHash, invitedBy: userId, expiresAt: new Date(now.getTime() + invitationDays * 86_400_000), acceptedAt: null, revokedAt: null, createdAt: now },

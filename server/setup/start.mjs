@@ -21,6 +21,11 @@ function askToStop() {
   stopping.abort();
 }
 for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, askToStop);
+// npm, or the shell between, may die without passing anything on: then nobody is left who wants this server.
+if (process.env.npm_lifecycle_event) {
+  const parent = process.ppid;
+  setInterval(() => process.ppid !== parent && askToStop(), 1000).unref();
+}
 
 let exitCode = 0;
 function tell(error) {

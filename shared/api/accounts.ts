@@ -32,6 +32,7 @@ const mailBody = z.object({ email: emailSchema });
 export const accountEndpoints = {
   signUp: endpoint({ id: 'signUp', method: 'post', path: '/api/account/sign-up', summary: 'Open an account; a letter to confirm the address follows.', access: 'public', rateLimit: 'mail', body: signUpBody, status: 202 }),
   confirmEmail: endpoint({ id: 'confirmEmail', method: 'post', path: '/api/account/confirm', summary: 'Confirm an address by the token of the letter.', access: 'public', rateLimit: 'signIn', body: z.object({ token: tokenSchema }) }),
+  resendConfirmation: endpoint({ id: 'resendConfirmation', method: 'post', path: '/api/account/confirm-request', summary: 'Send the letter to confirm my address again; earlier ones are good no more.', access: 'signedIn', rateLimit: 'mail', status: 202 }),
   signIn: endpoint({ id: 'signIn', method: 'post', path: '/api/account/sign-in', summary: 'Sign in; sets the session cookie.', access: 'public', rateLimit: 'signIn', body: signInBody, answer: meSchema }),
   signOut: endpoint({ id: 'signOut', method: 'post', path: '/api/account/sign-out', summary: 'Sign out of this session.', access: 'signedIn' }),
   me: endpoint({ id: 'me', method: 'get', path: '/api/account', summary: 'Who is signed in, and at which farms.', access: 'signedIn', answer: meSchema }),

@@ -29,7 +29,9 @@ export function answerOf(judgement: Judgement, options: AnswerOptions = {}): Ass
   const { morning } = judgement;
   const { morning: layout } = morning;
   const formats = formatsFor({ units: options.units ?? 'us', timeZone: layout.site.timeZone, date: layout.date });
-  const reasons = reasonsOf(judgement).map((bare): Reason => ({ limit: bare.limit, kind: bare.kind, at: bare.at, text: sentenceOf(bare, formats, options.language), key: bare.key, params: bare.params as Record<string, unknown> }));
+  const told = reasonsOf(judgement).map((bare): Reason => ({ limit: bare.limit, kind: bare.kind, at: bare.at, text: sentenceOf(bare, formats, options.language), key: bare.key, params: bare.params as Record<string, unknown> }));
+  // Two limits may want for the same value: it is said once.
+  const reasons = told.filter(({ text, kind }, index) => told.findIndex((other) => other.text === text && other.kind === kind) === index);
   let steps: AssessmentStep[] | null = null;
   return {
     verdict: judgement.verdict,

@@ -21,9 +21,10 @@ const mostBytes = 8_000_000;
 
 /** Answers one text: the assessment, or what is wrong with it. */
 function answerText(text: string, options: AnswerOptions): { answer: unknown; problems: CaseProblem[] | null } {
+  if (text.trim() === '') return problem('is empty; give a case as JSON');
   let value: unknown;
   try {
-    value = JSON.parse(text);
+    value = JSON.parse(text.replace(/^\uFEFF/, ''));
   } catch (error) {
     return problem(`is not JSON: ${error instanceof Error ? error.message.slice(0, 200) : 'unreadable'}`);
   }
@@ -64,7 +65,6 @@ async function run(): Promise<void> {
   const input = positionals[0] === undefined || positionals[0] === '-' ? process.stdin : createReadStream(positionals[0]);
   if (values.lines) {
     for await (const line of linesOf(input, mostBytes)) {
-      if (line !== null && line.trim() === '') continue;
       const { answer } = line === null ? problem(`is longer than ${mostBytes} bytes`) : answerText(line, options);
       await write(`${JSON.stringify(answer)}\n`);
     }

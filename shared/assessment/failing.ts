@@ -1,6 +1,6 @@
 import { firstWetHourMs } from './limits/rain-free.ts';
 import { nearestDownwindPlace } from './limits/toward-sensitive-place.ts';
-import type { Failing } from './messages.ts';
+import type { AtLimit, Failing } from './messages.ts';
 import { stepMs } from './morning.ts';
 import { boundAt, type Track } from './track.ts';
 import type { Judgement } from './verdict.ts';
@@ -9,6 +9,18 @@ const orNull = (value: number): number | null => (Number.isNaN(value) ? null : v
 
 /** Start of a step as UTC ISO 8601; the end of the last step for the number after it. */
 export const isoAt = ({ morning: { morning } }: Judgement, step: number): string => morning.times()[step] ?? new Date(morning.startMs + step * stepMs).toISOString();
+
+const placeAt = (judgement: Judgement, track: Track, step: number): string | null =>
+  track.limit === 'towardSensitivePlace' ? (nearestDownwindPlace(judgement.plan, judgement.morning.direction.fromDeg[step]!)?.name ?? null) : null;
+
+/** Value and bound of a limit at a step. */
+export const atLimit = (judgement: Judgement, track: Track, step: number): AtLimit => ({
+  limit: track.limit,
+  value: orNull(track.value[step]!),
+  bound: orNull(boundAt(track, step)),
+  at: isoAt(judgement, step),
+  place: placeAt(judgement, track, step),
+});
 
 /** How a limit fails over the morning; null when it never does. */
 export function failingOf(judgement: Judgement, track: Track): Failing | null {
@@ -41,7 +53,7 @@ export function failingOf(judgement: Judgement, track: Track): Failing | null {
     bound: orNull(bound),
     side: value[worst]! < bound ? 'below' : 'above',
     isForbidden: track.limit === 'pollinators' && rule !== undefined && rule.bloom && rule.beeStatement === 'notInBloom',
-    place: track.limit === 'towardSensitivePlace' ? (nearestDownwindPlace(judgement.plan, judgement.morning.direction.fromDeg[worst]!)?.name ?? null) : null,
+    place: placeAt(judgement, track, worst),
     rainAt: rainMs === null ? null : new Date(rainMs).toISOString(),
   };
 }

@@ -53,8 +53,8 @@ export function formatsFor({ units, timeZone, date }: FormatOptions): Formats {
       const hour = Math.floor(ofDay / 60);
       const minute = String(ofDay % 60).padStart(2, '0');
       if (!isUs) return { text: `${String(hour).padStart(2, '0')}:${minute}`, daysLater };
-      // The morning needs no "am"; everything else does need its half of the day.
-      const half = hour >= 12 ? ' pm' : daysLater === 0 ? '' : ' am';
+      // The morning and its noon need no "am" or "pm"; everything else does need its half of the day.
+      const half = ofDay === 720 && daysLater === 0 ? '' : hour >= 12 ? ' pm' : daysLater === 0 ? '' : ' am';
       return { text: `${hour % 12 === 0 ? 12 : hour % 12}:${minute}${half}`, daysLater };
     },
     ofLimit(limit, value) {

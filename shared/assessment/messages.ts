@@ -30,6 +30,8 @@ export interface AtLimit {
   value: number | null;
   bound: number | null;
   at: string;
+  /** The sensitive place meant, where the limit is about one. */
+  place: string | null;
 }
 
 /** Every sentence by key, with what it is filled with. */

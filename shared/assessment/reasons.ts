@@ -1,12 +1,9 @@
 import { cautionsOf } from './cautions.ts';
-import { closingAt, failingOf, isoAt } from './failing.ts';
+import { atLimit, closingAt, failingOf, isoAt } from './failing.ts';
 import { reason, type BareReason, type Failing } from './messages.ts';
 import { stepMinutes } from './morning.ts';
-import { boundAt, type Track } from './track.ts';
-import { highestStep, longestRun, lowestStep, type Judgement } from './verdict.ts';
+import { highestStep, longestRun, lowestStep, shutTrack, type Judgement } from './verdict.ts';
 import { minutesOf } from './windows.ts';
-
-const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value);
 
 /** Why the verdict is what it is, the leading reason first; not yet in words. */
 export function reasonsOf(judgement: Judgement): BareReason[] {
@@ -24,14 +21,9 @@ function goReasons(judgement: Judgement): BareReason[] {
   const track = tracks[leastTrack[tightest] ?? -1];
   const closes = closingAt(judgement, chosen.to, 'closes');
   const reasons: BareReason[] = [];
-  if (track) reasons.push(bindingReason(judgement, track, tightest));
+  if (track) reasons.push(reason(track.limit, 'binding', 'limit.binding', atLimit(judgement, track, tightest), isoAt(judgement, tightest)));
   reasons.push(reason(closes?.limit ?? 'time', 'advice', 'window.closes', { endAt: isoAt(judgement, chosen.to), failing: closes }, isoAt(judgement, chosen.to)));
   return reasons;
-}
-
-function bindingReason(judgement: Judgement, track: Track, step: number): BareReason {
-  const at = isoAt(judgement, step);
-  return reason(track.limit, 'binding', 'limit.binding', { limit: track.limit, value: orNull(track.value[step]!), bound: orNull(boundAt(track, step)), at }, at);
 }
 
 /** One reason per hard limit that fails anywhere, the binding one first. */
@@ -58,16 +50,16 @@ function missReasons(judgement: Judgement): BareReason[] {
     return [reason((closes ?? opens)?.limit ?? 'time', 'nearestMiss', 'miss.short', { missingMinutes, opens, closes }, closes?.fromAt ?? opens?.untilAt ?? null)];
   }
   if (count * stepMinutes < neededMinutes) return [reason('time', 'hold', 'time.morningShort', { morningMinutes: count * stepMinutes, neededMinutes })];
-  const overlap = overlapOf(judgement);
+  const shut = shutTrack(judgement.tracks);
+  const overlap = shut ? null : overlapOf(judgement);
   if (overlap) return [overlap];
-  const step = highestStep(judgement.least);
-  const track = judgement.tracks[judgement.leastTrack[step] ?? -1];
-  if (!track || judgement.least[step]! <= -1 || bindingLimit === 'data') return [];
-  const at = isoAt(judgement, step);
+  const step = highestStep(shut ? shut.headroom : judgement.least);
+  const track = shut ?? judgement.tracks[judgement.leastTrack[step] ?? -1];
+  if (!track || !(track.headroom[step]! > -1) || bindingLimit === 'data') return [];
   // A limit that fails all morning leads with its own sentence; how near it came is told after it.
-  const failing = failingOf(judgement, track);
-  const closest = reason(track.limit, 'nearestMiss', 'miss.closest', { limit: track.limit, value: orNull(track.value[step]!), bound: orNull(boundAt(track, step)), at }, at);
-  return failing?.pattern === 'all' ? [reason(track.limit, 'nearestMiss', 'limit.fails', failing), closest] : [closest];
+  const failing = shut ? failingOf(judgement, shut) : null;
+  const closest = reason(track.limit, 'nearestMiss', 'miss.closest', atLimit(judgement, track, step), isoAt(judgement, step));
+  return failing ? [reason(track.limit, 'nearestMiss', 'limit.fails', failing), closest] : [closest];
 }
 
 /** Two limits that close the morning between them: the one that holds from its start, and the one that closes to its end. */

@@ -88,12 +88,14 @@ const minutes = (count: number): string => `${count} minute${count === 1 ? '' : 
 
 /** English: one clause per message, without capital and full stop. */
 export const english: { [Key in MessageKey]: (params: Messages[Key], f: Formats) => string } = {
-  'limit.binding': (p, f) => `${names[p.limit]} leaves the least to spare: ${f.ofLimit(p.limit, p.value)} against ${f.ofLimit(p.limit, p.bound)} at ${clock(f, p.at)}`,
+  'limit.binding': (p, f) =>
+    p.place !== null ? `the wind comes closest to carrying spray toward ${p.place} at ${clock(f, p.at)}` : `${names[p.limit]} leaves the least to spare: ${f.ofLimit(p.limit, p.value)} against ${f.ofLimit(p.limit, p.bound)} at ${clock(f, p.at)}`,
   'limit.fails': failing,
   'window.closes': (p, f) => (p.failing === null ? `the window closes at ${clock(f, p.endAt)}, the end of the morning` : `the window closes at ${clock(f, p.endAt)}: ${failing(p.failing, f)}`),
   'miss.short': (p, f) => `${minutes(p.missingMinutes)} short: ${[p.opens, p.closes].filter((cause) => cause !== null).map((cause) => failing(cause, f)).join(', and ')}`,
   'miss.noOverlap': (p, f) => `no minute is open: ${failing(p.first, f)}, and ${failing(p.last, f)}`,
-  'miss.closest': (p, f) => `closest at ${clock(f, p.at)}: ${names[p.limit]} ${f.ofLimit(p.limit, p.value)} against ${f.ofLimit(p.limit, p.bound)}`,
+  'miss.closest': (p, f) =>
+    p.place !== null ? `least toward ${p.place} at ${clock(f, p.at)}` : `closest at ${clock(f, p.at)}: ${names[p.limit]} ${f.ofLimit(p.limit, p.value)} against ${f.ofLimit(p.limit, p.bound)}`,
   'time.morningShort': (p) => `the job needs ${minutes(p.neededMinutes)}, and the morning has ${p.morningMinutes} from civil dawn to noon`,
   'time.noMorning': () => 'there is no daylight before noon on this date',
   'data.missing': (p, f) => `not enough to tell: the forecast gives ${missing[p.limit]} from ${clock(f, p.fromAt)} to ${clock(f, p.untilAt)}`,

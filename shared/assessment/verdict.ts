@@ -93,7 +93,7 @@ function couldFit(least: Float64Array, isUntold: Uint8Array, neededMinutes: numb
 
 /**
  * The limit with the least headroom: over job and reserve on a go; on a hold at the morning's best step, unless the longest window
- * is closed by a limit, which then binds.
+ * is closed by a limit, or one fails in every step, which then binds.
  */
 function bindingOf({ chosen, enoughToTell, tracks, least, leastTrack, isUntold, runs, neededMinutes, morning }: Judgement): Judgement['bindingLimit'] {
   if (!enoughToTell) return 'data';
@@ -106,7 +106,24 @@ function bindingOf({ chosen, enoughToTell, tracks, least, leastTrack, isUntold, 
   if (morning.morning.count * stepMinutes < neededMinutes || morning.morning.count === 0) return 'time';
   const longest = longestRun(runs);
   if (longest) return nameOf(longest.to < least.length ? longest.to : longest.from - 1) ?? 'time';
-  return nameOf(highestStep(least));
+  return shutTrack(tracks)?.limit ?? nameOf(highestStep(least));
+}
+
+/** Of the hard limits that fail in every step, the one that comes least near; null when none does. */
+export function shutTrack(tracks: readonly Track[]): Track | null {
+  let shut: Track | null = null;
+  let nearest = 0;
+  for (const track of tracks) {
+    if (!track.isHard) continue;
+    let best = -Infinity;
+    // An unknown step may be an open one.
+    for (const headroom of track.headroom) best = Math.max(best, Number.isNaN(headroom) ? 1 : headroom);
+    if (best < nearest) {
+      nearest = best;
+      shut = track;
+    }
+  }
+  return shut;
 }
 
 export const longestRun = (runs: readonly StepRun[]): StepRun | null => runs.reduce<StepRun | null>((longest, run) => (longest && longest.to - longest.from >= run.to - run.from ? longest : run), null);

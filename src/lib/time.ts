@@ -1,67 +1,53 @@
-/** Times as people read them, always in the farm's own zone. Formatters are kept, because making one is slow. */
+import type { Units } from '../../shared/api/accounts.ts';
+import { formatsFor } from '../../shared/assessment/formats.ts';
+import { localDateOf } from '../../shared/units/time-zone.ts';
+
+/** How a person reads: their units (which choose the clock, too) and the farm's zone. */
+export interface Reader {
+  units: Units;
+  timeZone: string;
+}
+
+/** Formatters are kept, because making one is slow. */
 const formatters = new Map<string, Intl.DateTimeFormat>();
 
-function formatter(language: string, options: Intl.DateTimeFormatOptions): Intl.DateTimeFormat {
+function formatter(options: Intl.DateTimeFormatOptions): Intl.DateTimeFormat {
+  const language = document.documentElement.lang || 'en';
   const key = language + JSON.stringify(options);
-  let made = formatters.get(key);
-  if (!made) {
-    made = new Intl.DateTimeFormat(language, options);
-    formatters.set(key, made);
-  }
+  const made = formatters.get(key) ?? new Intl.DateTimeFormat(language === 'en' ? 'en-US' : language, options);
+  formatters.set(key, made);
   return made;
 }
 
-const language = (): string => document.documentElement.lang || 'en';
+/** The local calendar date of an instant, `YYYY-MM-DD`. */
+export const dateOf = (instant: string, timeZone: string): string => localDateOf(Date.parse(instant), timeZone);
 
-/** Whether this language reads a clock of twelve hours. */
-const twelveHours = (): boolean => formatter(language() === 'en' ? 'en-US' : language(), { hour: 'numeric' }).resolvedOptions().hour12 === true;
-
-/** Local clock time without am or pm, `5:25`: for mornings, where no one can mistake it. */
-export function clockTime(instant: string, timeZone: string): string {
-  const parts = formatter('en-US', { hour: 'numeric', minute: '2-digit', hour12: false, hourCycle: 'h23', timeZone }).formatToParts(new Date(instant));
-  const of = (type: string): string => parts.find((part) => part.type === type)?.value ?? '';
-  return `${Number(of('hour'))}:${of('minute')}`;
-}
+/** Clock time as the sentences of an assessment write it: `5:25`, in the afternoon `2:10 pm`; metric readers get `05:25`. */
+export const clockTime = (instant: string, { units, timeZone }: Reader): string => formatsFor({ units, timeZone, date: dateOf(instant, timeZone) }).clock(instant).text;
 
 /** Date and clock time, `Jun 10, 8:00 PM`: for anything that may lie outside a morning. */
-export function dateTime(instant: string, timeZone: string): string {
-  return formatter(language() === 'en' ? 'en-US' : language(), { month: 'short', day: 'numeric', hour: 'numeric', minute: '2-digit', hour12: twelveHours(), timeZone }).format(new Date(instant));
-}
+export const dateTime = (instant: string, { units, timeZone }: Reader): string => formatter({ month: 'short', day: 'numeric', hour: 'numeric', minute: '2-digit', hour12: units === 'us', timeZone }).format(new Date(instant));
 
-/** The local calendar date of an instant, `YYYY-MM-DD`. */
-export function localDate(instant: string, timeZone: string): string {
-  return formatter('en-CA', { year: 'numeric', month: '2-digit', day: '2-digit', timeZone }).format(new Date(instant));
-}
-
-const day = (date: string): Date => new Date(`${date}T12:00:00Z`);
+const noon = (date: string): Date => new Date(`${date}T12:00:00Z`);
 
 /** A calendar date in words, `Wednesday, June 10`. */
-export function longDate(date: string): string {
-  return formatter(language() === 'en' ? 'en-US' : language(), { weekday: 'long', month: 'long', day: 'numeric', timeZone: 'UTC' }).format(day(date));
-}
+export const longDate = (date: string): string => formatter({ weekday: 'long', month: 'long', day: 'numeric', timeZone: 'UTC' }).format(noon(date));
 
 /** A calendar date in few letters, `Jun 10`. */
-export function shortDate(date: string): string {
-  return formatter(language() === 'en' ? 'en-US' : language(), { month: 'short', day: 'numeric', timeZone: 'UTC' }).format(day(date));
-}
+export const shortDate = (date: string): string => formatter({ month: 'short', day: 'numeric', timeZone: 'UTC' }).format(noon(date));
 
-/** The day of the week in three letters. */
-export function weekday(date: string): string {
-  return formatter(language() === 'en' ? 'en-US' : language(), { weekday: 'short', timeZone: 'UTC' }).format(day(date));
-}
+/** The day of the week in few letters, `Wed`. */
+export const weekday = (date: string): string => formatter({ weekday: 'short', timeZone: 'UTC' }).format(noon(date));
 
 /** Whole days from one calendar date to another. */
-export function daysBetween(from: string, to: string): number {
-  return Math.round((day(to).getTime() - day(from).getTime()) / 86_400_000);
-}
+export const daysBetween = (from: string, to: string): number => Math.round((noon(to).getTime() - noon(from).getTime()) / 86_400_000);
+
+/** Minutes from one instant to another; never negative. */
+export const minutesBetween = (from: string, to: string): number => Math.max(0, (Date.parse(to) - Date.parse(from)) / 60_000);
 
 /** A span in words: `4 min`, `3 h`, `2 days`. */
 export function span(minutes: number): string {
   if (minutes < 1) return 'less than a minute';
   if (minutes < 90) return `${Math.round(minutes)} min`;
-  if (minutes < 48 * 60) return `${Math.round(minutes / 60)} h`;
-  return `${Math.round(minutes / 1440)} days`;
+  return minutes < 48 * 60 ? `${Math.round(minutes / 60)} h` : `${Math.round(minutes / 1440)} days`;
 }
-
-/** Minutes from one instant to another; never negative. */
-export const minutesBetween = (from: string, to: string): number => Math.max(0, (Date.parse(to) - Date.parse(from)) / 60_000);

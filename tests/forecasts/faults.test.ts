@@ -1,16 +1,14 @@
 import { http, HttpResponse } from 'msw';
-import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import type { ProviderError, ProviderId } from '../../server/forecasts/provider.ts';
 import { issued, place, stage, userAgent } from './support.ts';
 
 let scene = stage();
-beforeAll(() => undefined);
 beforeEach(() => {
   scene = stage();
   scene.server.listen({ onUnhandledRequest: 'error' });
 });
 afterEach(() => scene.server.close());
-afterAll(() => undefined);
 
 const failure = async (id: ProviderId): Promise<ProviderError> =>
   scene.ask(id).then(
@@ -34,8 +32,9 @@ describe.each(all)('when %s has its troubles', (id) => {
 
   it('a single bad moment goes unnoticed', async () => {
     let bad = 1;
-    scene.server.use(http.get('https://*', () => (bad-- > 0 ? new HttpResponse('busy', { status: 503 }) : undefined)));
+    scene.server.use(http.get('https://*', ({ request }) => (request.url.includes(forecastCall[id]) && bad-- > 0 ? new HttpResponse('busy', { status: 503 }) : undefined)));
     expect(issued(await scene.ask(id)).hours.length).toBeGreaterThan(100);
+    expect(scene.sleeps).toEqual([500]);
   });
 
   it('“too many requests” is obeyed: no second try, and the wait that was asked for is told on', async () => {

@@ -15,7 +15,7 @@ declare module 'vitest' {
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
   const folder = mkdtempSync(join(tmpdir(), 'dawnvane-test-'));
   const database = await startMariaDb({ folder, throwAway: true });
-  project.provide('databaseAdminUrl', database.adminUrl);
+  project.provide('databaseAdminUrl', database.url);
   return async () => {
     await database.stop();
     rmSync(folder, { recursive: true, force: true });

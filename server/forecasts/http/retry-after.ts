@@ -7,6 +7,7 @@ export function retryAfterMs(header: string | null, answeredAt: Date): number | 
   if (header === null) return null;
   const text = header.trim();
   if (/^\d+$/.test(text)) return Number(text) * 1000;
-  const until = Date.parse(text);
+  // A date names its weekday or month; Date.parse alone would take “-5” for a year.
+  const until = /[a-z]{3}/i.test(text) ? Date.parse(text) : Number.NaN;
   return Number.isFinite(until) ? Math.max(0, until - answeredAt.getTime()) : null;
 }

@@ -1,5 +1,6 @@
 import { useState, type ReactNode } from 'react';
 import { useNavigate } from 'react-router-dom';
+import type { Change } from '../../lib/api/kept.ts';
 import type { FormPart } from '../../lib/forms/form-part.ts';
 import { PageHeading, useToast } from '../index.ts';
 
@@ -7,7 +8,7 @@ interface EditorProps<Item extends { name: string; version: number }, Body> {
   title: string;
   /** What is edited; null for a new one. */
   stored: Item | null;
-  save: (body: Body & { version?: number }) => Promise<Item>;
+  save: (change: Change<Body>) => Promise<Item>;
   /** Where to go once it is saved. */
   after: (item: Item) => string;
   cancelTo: string;
@@ -21,7 +22,7 @@ export function RecordEditor<Item extends { name: string; version: number }, Bod
   const [opened] = useState(stored);
 
   async function send(body: Body) {
-    const item = await save(opened ? { ...body, version: opened.version } : body);
+    const item = await save({ body, version: opened?.version });
     toast(opened ? `${item.name} is saved.` : `${item.name} is added.`);
     await navigate(after(item), { replace: true });
   }

@@ -1,4 +1,4 @@
-import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import { queryOptions, useMutation, useQueryClient, useSuspenseQuery } from '@tanstack/react-query';
 import type { AnswerOf, BodyInputOf, Endpoint } from '../../../shared/api/endpoint.ts';
 import { call, type CallParts, type Route } from './call.ts';
 import { keys, type KeptNoun } from './keys.ts';
@@ -12,6 +12,12 @@ interface KeptRoutes<Read extends Endpoint, Create extends Endpoint, Update exte
 }
 
 export type Archived = 'no' | 'yes' | 'all';
+
+/** A body to save, and the version of the copy it was made from; undefined for a new thing. */
+export interface Change<Body> {
+  body: Body;
+  version: number | undefined;
+}
 
 /** Parts whose type the generic routes cannot tell; the pairs of route and parts below are right by construction. */
 const parts = <E extends Endpoint>(given: { params: Record<string, string>; query?: Record<string, string>; body?: unknown; signal?: AbortSignal }) => given as unknown as CallParts<E>;
@@ -35,6 +41,12 @@ export function keptApi<Read extends Endpoint, Create extends Endpoint, Update e
       queryFn: async ({ signal }): Promise<Item> => call(routes.read, parts<Read>({ params: { farmId, id }, signal })),
     });
 
+  /** The list, for a part of a page that waits for it. */
+  const useList = (farmId: string, archived: Archived = 'no'): Item[] => useSuspenseQuery(listQuery(farmId, archived)).data;
+
+  /** One of them, for a page that waits for it. */
+  const useOne = (farmId: string, id: string): Item => useSuspenseQuery(oneQuery(farmId, id)).data;
+
   function useForget(farmId: string) {
     const client = useQueryClient();
     return () => Promise.all([client.invalidateQueries({ queryKey: keys.kept(farmId, noun) }), client.invalidateQueries({ queryKey: keys.mornings(farmId) })]);
@@ -44,8 +56,8 @@ export function keptApi<Read extends Endpoint, Create extends Endpoint, Update e
   function useSave(farmId: string, id: string | null) {
     const forget = useForget(farmId);
     return useMutation({
-      mutationFn: async (body: BodyInputOf<Create> | BodyInputOf<Update>): Promise<Item> =>
-        id === null ? ((await call(routes.create, parts<Create>({ params: { farmId }, body }))) as Item) : ((await call(routes.update, parts<Update>({ params: { farmId, id }, body }))) as Item),
+      mutationFn: async ({ body, version }: Change<BodyInputOf<Create>>): Promise<Item> =>
+        id === null ? ((await call(routes.create, parts<Create>({ params: { farmId }, body }))) as Item) : ((await call(routes.update, parts<Update>({ params: { farmId, id }, body: { ...(body as object), version } }))) as Item),
       onSuccess: forget,
     });
   }
@@ -58,5 +70,5 @@ export function keptApi<Read extends Endpoint, Create extends Endpoint, Update e
     });
   }
 
-  return { listQuery, oneQuery, useSave, useArchive };
+  return { listQuery, useList, useOne, useSave, useArchive };
 }

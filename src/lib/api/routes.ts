@@ -36,6 +36,7 @@ export const routes = {
   account: {
     signUp: route<Account['signUp']>('post', '/api/account/sign-up'),
     confirmEmail: route<Account['confirmEmail']>('post', '/api/account/confirm'),
+    resendConfirmation: route<Account['resendConfirmation']>('post', '/api/account/confirm-request'),
     signIn: route<Account['signIn']>('post', '/api/account/sign-in'),
     signOut: route<Account['signOut']>('post', '/api/account/sign-out'),
     me: route<Account['me']>('get', '/api/account'),

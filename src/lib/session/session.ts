@@ -1,6 +1,7 @@
 import { createContext, useContext } from 'react';
 import type { Me, Units } from '../../../shared/api/accounts.ts';
 import { may, type Action, type Resource } from '../../../shared/rules/authorization.ts';
+import type { Reader } from '../time.ts';
 
 export type Membership = Me['farms'][number];
 
@@ -30,4 +31,11 @@ export function useFarm(): Membership {
 export function useMay(): (action: Action, resource: Resource) => boolean {
   const { role } = useFarm();
   return (action, resource) => may(role, action, resource);
+}
+
+/** How the person signed in reads this farm's times and figures. */
+export function useReader(): Reader {
+  const { units } = useMe();
+  const { timeZone } = useFarm();
+  return { units, timeZone };
 }

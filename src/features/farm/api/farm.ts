@@ -2,6 +2,7 @@ import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query
 import type { BodyInputOf } from '../../../../shared/api/endpoint.ts';
 import type { farmEndpoints } from '../../../../shared/api/farms.ts';
 import { call } from '../../../lib/api/call.ts';
+import type { Change } from '../../../lib/api/kept.ts';
 import { keys } from '../../../lib/api/keys.ts';
 import { routes } from '../../../lib/api/routes.ts';
 
@@ -21,7 +22,7 @@ export function useCreateFarm() {
 export function useUpdateFarm(farmId: string) {
   const forget = useForget();
   return useMutation({
-    mutationFn: (body: BodyInputOf<typeof farmEndpoints.updateFarm>) => call(routes.farm.update, { params: { farmId }, body }),
+    mutationFn: ({ body, version }: Change<BodyInputOf<typeof farmEndpoints.createFarm>>) => call(routes.farm.update, { params: { farmId }, body: { ...body, version } }),
     onSuccess: () => forget(farmId),
   });
 }

@@ -1,4 +1,3 @@
-import { useSuspenseQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import { RecordPage } from '../../../components/records/record-page.tsx';
 import { paths } from '../../../lib/paths.ts';
@@ -10,7 +9,7 @@ export function BlockPage() {
   const { id: farmId } = useFarm();
   const { id = '' } = useParams();
   const units = useUnits();
-  const { data: block } = useSuspenseQuery(blocksApi.oneQuery(farmId, id));
+  const block = blocksApi.useOne(farmId, id);
   const archive = blocksApi.useArchive(farmId);
   return (
     <RecordPage

@@ -1,4 +1,3 @@
-import { useSuspenseQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import { RecordEditor } from '../../../components/records/record-editor.tsx';
 import { paths } from '../../../lib/paths.ts';
@@ -19,7 +18,7 @@ export function NewBlockPage() {
 export function EditBlockPage() {
   const { id: farmId } = useFarm();
   const { id = '' } = useParams();
-  const { data: block } = useSuspenseQuery(blocksApi.oneQuery(farmId, id));
+  const block = blocksApi.useOne(farmId, id);
   const save = blocksApi.useSave(farmId, id);
   const here = paths.blocks.one(farmId, id);
   return (

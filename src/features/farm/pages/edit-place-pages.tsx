@@ -1,4 +1,3 @@
-import { useSuspenseQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import { RecordEditor } from '../../../components/records/record-editor.tsx';
 import { paths } from '../../../lib/paths.ts';
@@ -19,7 +18,7 @@ export function NewPlacePage() {
 export function EditPlacePage() {
   const { id: farmId } = useFarm();
   const { id = '' } = useParams();
-  const { data: place } = useSuspenseQuery(placesApi.oneQuery(farmId, id));
+  const place = placesApi.useOne(farmId, id);
   const save = placesApi.useSave(farmId, id);
   const here = paths.places.one(farmId, id);
   return (

@@ -1,4 +1,3 @@
-import { useSuspenseQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import { RecordEditor } from '../../../components/records/record-editor.tsx';
 import { paths } from '../../../lib/paths.ts';
@@ -19,7 +18,7 @@ export function NewSprayerPage() {
 export function EditSprayerPage() {
   const { id: farmId } = useFarm();
   const { id = '' } = useParams();
-  const { data: sprayer } = useSuspenseQuery(sprayersApi.oneQuery(farmId, id));
+  const sprayer = sprayersApi.useOne(farmId, id);
   const save = sprayersApi.useSave(farmId, id);
   const here = paths.sprayers.one(farmId, id);
   return (

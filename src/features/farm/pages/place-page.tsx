@@ -1,4 +1,3 @@
-import { useSuspenseQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import { RecordPage } from '../../../components/records/record-page.tsx';
 import { paths } from '../../../lib/paths.ts';
@@ -11,7 +10,7 @@ export function PlacePage() {
   const { id: farmId } = useFarm();
   const { id = '' } = useParams();
   const units = useUnits();
-  const { data: place } = useSuspenseQuery(placesApi.oneQuery(farmId, id));
+  const place = placesApi.useOne(farmId, id);
   const archive = placesApi.useArchive(farmId);
   return (
     <RecordPage

@@ -1,4 +1,3 @@
-import { useSuspenseQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import { RecordPage } from '../../../components/records/record-page.tsx';
 import { paths } from '../../../lib/paths.ts';
@@ -11,7 +10,7 @@ export function SprayerPage() {
   const { id: farmId } = useFarm();
   const { id = '' } = useParams();
   const units = useUnits();
-  const { data: sprayer } = useSuspenseQuery(sprayersApi.oneQuery(farmId, id));
+  const sprayer = sprayersApi.useOne(farmId, id);
   const archive = sprayersApi.useArchive(farmId);
   return (
     <RecordPage

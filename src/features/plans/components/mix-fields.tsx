@@ -3,7 +3,7 @@ import type { Product } from '../../../../shared/api/plans.ts';
 import { Button } from '../../../components/index.ts';
 import { ChoiceField, NumberField } from '../../../lib/forms/fields.tsx';
 import type { TypedForm } from '../../../lib/forms/use-typed-form.ts';
-import { rateUnitWords } from '../rate-words.ts';
+import { rateUnitWords } from '../../../lib/rate-words.ts';
 import type { PlanBody } from './plan-form.tsx';
 
 const productsMax = 6;

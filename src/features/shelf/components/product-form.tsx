@@ -1,10 +1,11 @@
 import { productBody, productProblems, type Product } from '../../../../shared/api/plans.ts';
 import type { z } from 'zod';
 import { CheckField, ChoiceField, Fields, NotesField, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { rateUnitWords } from '../../../lib/rate-words.ts';
 import type { FormPart } from '../../../lib/forms/form-part.ts';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { choices } from '../../../lib/forms/choices.ts';
-import { beeStatementWords, moaSystemWords, rateUnitWords } from '../words.ts';
+import { beeStatementWords, moaSystemWords } from '../words.ts';
 
 type Body = z.infer<typeof productBody>;
 

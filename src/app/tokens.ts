@@ -1,0 +1,41 @@
+/** Colours of the two themes: paper by day, night in the field before sunrise. Contrast is held by a test. */
+export const themes = {
+  light: {
+    night: '#1e2440',
+    dusk: '#5d5a86',
+    'dusk-pale': '#d9d6e6',
+    rose: '#c98f86',
+    'rose-pale': '#f2dfdb',
+    'rose-deep': '#8a4a41',
+    straw: '#f0b95b',
+    'straw-pale': '#fbe9c6',
+    paper: '#fbf7ee',
+    'paper-raised': '#fffdf8',
+    'paper-sunk': '#f1ebdc',
+    ink: '#23261f',
+    'ink-soft': '#585b50',
+    needle: '#2f5d50',
+    'needle-deep': '#234a3f',
+    'needle-on': '#fffdf8',
+  },
+  dark: {
+    night: '#0e1226',
+    dusk: '#a8a4d0',
+    'dusk-pale': '#3a3f66',
+    rose: '#c98f86',
+    'rose-pale': '#43313f',
+    'rose-deep': '#ecb9b0',
+    straw: '#f0b95b',
+    'straw-pale': '#4d4233',
+    paper: '#161b33',
+    'paper-raised': '#1e2440',
+    'paper-sunk': '#10142a',
+    ink: '#f3ecdc',
+    'ink-soft': '#bcb9c6',
+    needle: '#93cbb8',
+    'needle-deep': '#b4ddcf',
+    'needle-on': '#10142a',
+  },
+} as const;
+
+export type TokenName = keyof (typeof themes)['light'];

@@ -1,0 +1,14 @@
+import { useSyncExternalStore } from 'react';
+
+/** Whether a media query holds, kept up to date. */
+export function useMediaQuery(query: string): boolean {
+  return useSyncExternalStore(
+    (changed) => {
+      const list = window.matchMedia(query);
+      list.addEventListener('change', changed);
+      return () => list.removeEventListener('change', changed);
+    },
+    () => window.matchMedia(query).matches,
+    () => true,
+  );
+}

@@ -1,0 +1,31 @@
+import type { PlanVerdict } from '../../shared/api/mornings.ts';
+import type { Reason } from '../../shared/assessment/answer.ts';
+import { retell } from '../../shared/assessment/sentences.ts';
+import type { VerdictState } from '../../shared/look/verdict-sign.ts';
+import { clockTime, type Reader } from './time.ts';
+
+export const stateOf = ({ verdict, enoughToTell }: Pick<PlanVerdict, 'verdict' | 'enoughToTell'>): VerdictState => (enoughToTell ? verdict : 'unknown');
+
+/** `5:25 to 6:10`; nothing without a window. */
+export function windowText(verdict: Pick<PlanVerdict, 'verdict' | 'window'>, reader: Reader): string {
+  const { window } = verdict;
+  return verdict.verdict === 'go' && window ? `${clockTime(window.start, reader)} to ${clockTime(window.end, reader)}` : '';
+}
+
+const leading: readonly Reason['kind'][] = ['notEnough', 'nearestMiss', 'hold', 'binding'];
+
+/** The one sentence that tells why: what is missing, what nearly fitted, what holds, or what binds. */
+export function why(verdict: PlanVerdict, { units, timeZone }: Reader): string {
+  const sun = { ...verdict.sun, solarNoon: null, sunset: null };
+  for (const kind of leading) {
+    const reason = verdict.reasons.find((candidate) => candidate.kind === kind);
+    if (reason) return retell(reason, { sun }, { units, timeZone });
+  }
+  return verdict.headline[units];
+}
+
+/** `45 minutes open; the job needs 31 and 10 to spare.` */
+export function minutesText({ window, minutesNeeded, reserveMinutes }: Pick<PlanVerdict, 'window' | 'minutesNeeded' | 'reserveMinutes'>): string {
+  const needed = `the job needs ${minutesNeeded}${reserveMinutes > 0 ? ` and ${reserveMinutes} to spare` : ''}`;
+  return window ? `${Math.round(window.minutes)} minutes open; ${needed}.` : `No minute open; ${needed}.`;
+}
