@@ -13,6 +13,11 @@ export class FaultQueue {
     for (let time = 0; time < times; time += 1) this.#faults.push(fault);
   }
 
+  clear(): void {
+    this.#faults = [];
+    this.#afterMs = 0;
+  }
+
   /** Every answer comes this much later, until set to 0 again. */
   slow(ms: number): void {
     this.#afterMs = ms;

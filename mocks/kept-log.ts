@@ -19,6 +19,15 @@ export class KeptLog<Item> {
 
   add(item: Item): void {
     this.#items = [item, ...this.#items].slice(0, this.#max);
+    this.#write();
+  }
+
+  clear(): void {
+    this.#items = [];
+    this.#write();
+  }
+
+  #write(): void {
     if (!this.#file) return;
     // Written beside and moved, so that a kill leaves the old file or the new one.
     writeFileSync(`${this.#file}.new`, JSON.stringify(this.#items), { mode: 0o600 });

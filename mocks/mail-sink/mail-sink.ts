@@ -23,6 +23,8 @@ export interface MailSink {
   url: string;
   /** Newest first. */
   mails(): ReceivedMail[];
+  /** Forgets what was received. */
+  clear(): void;
   failNext(fault: MailFault, times?: number): void;
   stop(): Promise<void>;
 }
@@ -65,6 +67,7 @@ export async function startMailSink({ clock, logFile = null }: { clock: { now():
   return {
     url: `smtp://127.0.0.1:${port}`,
     mails: () => log.items,
+    clear: () => log.clear(),
     failNext: (fault, times = 1) => {
       for (let time = 0; time < times; time += 1) faults.push(fault);
     },

@@ -33,6 +33,8 @@ export interface PushServiceFake {
   received(): DemoPush[];
   /** What the phones show: of one tag on one phone, and of one topic, only the newest. */
   shown(): DemoPush[];
+  /** Forgets what was received. */
+  clear(): void;
   /** Called for each push that reached a phone. */
   onPush(listener: (received: ReceivedPush) => void): void;
 }
@@ -81,6 +83,7 @@ export function createPushService({ clock, phones, logFile = null }: { clock: { 
     faults,
     received: () => log.items,
     shown: () => log.items.filter((push, index, all) => push.tag === null || all.findIndex((other) => other.tag === push.tag && other.device === push.device) === index),
+    clear: () => log.clear(),
     onPush: (listener) => listeners.push(listener),
   };
 }

@@ -72,7 +72,7 @@ export function createSynoptic(seed: number, longitude: number): (atMs: number, 
     const taus = near.map((one) => passedH(one, atMs, view));
     const atH = atMs / hourMs;
     const felt: Synoptic = {
-      gradientWindMs: 4.9 + 1.9 * drift(keys.wind, atH / 30),
+      gradientWindMs: 5.1 + 2.4 * drift(keys.wind, atH / 30),
       windFromDeg: 0,
       cloudFraction: 0.3 + 0.2 * drift(keys.cloud, atH / 22) + 0.1 * drift(keys.scud, atH / 5),
       airMassC: 1.8 * drift(keys.air, atH / 90),

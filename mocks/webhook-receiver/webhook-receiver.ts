@@ -21,6 +21,8 @@ export interface WebhookReceiver {
   trust(secret: string): void;
   /** Newest first. */
   hooks(): DemoHook[];
+  /** Forgets what was received. */
+  clear(): void;
 }
 
 /** A receiver of outgoing webhooks that checks signature and date by itself. Its secret is made at the first start and kept in a file. */
@@ -43,5 +45,5 @@ export function createWebhookReceiver({ clock, logFile = null, secretFile = null
     return answer;
   }
 
-  return { handlers: [http.post(`${webhookOrigin}/*`, ({ request }) => receive(request))], faults, url: `${webhookOrigin}/quillbrook`, secret, trust: (one) => secrets.push(one), hooks: () => log.items };
+  return { handlers: [http.post(`${webhookOrigin}/*`, ({ request }) => receive(request))], faults, url: `${webhookOrigin}/quillbrook`, secret, trust: (one) => secrets.push(one), hooks: () => log.items, clear: () => log.clear() };
 }

@@ -6,7 +6,8 @@ import { join } from 'node:path';
 export interface FileStore {
   /** Keeps bytes under a new key. */
   put(bytes: Buffer): Promise<{ key: string; sha256: string }>;
-  get(key: string): Promise<Buffer>;
+  /** The bytes of a key; null when the store has lost them. */
+  get(key: string): Promise<Buffer | null>;
   remove(key: string): Promise<void>;
 }
 
@@ -25,7 +26,14 @@ export function folderStore(folder: string): FileStore {
       await writeFile(pathOf(key), bytes, { mode: 0o600, flag: 'wx' });
       return { key, sha256: createHash('sha256').update(bytes).digest('hex') };
     },
-    get: (key) => readFile(pathOf(key)),
+    async get(key) {
+      try {
+        return await readFile(pathOf(key));
+      } catch (error) {
+        if ((error as NodeJS.ErrnoException).code === 'ENOENT') return null;
+        throw error;
+      }
+    },
     remove: (key) => rm(pathOf(key), { force: true }),
   };
 }

@@ -1,23 +1,22 @@
 import { randomUUID } from 'node:crypto';
-import type { Transaction } from 'sequelize';
+import { Op, type Transaction } from 'sequelize';
 import type { z } from 'zod';
 import type { keptEndpoints } from '../../shared/api/farms.ts';
 import { audit, differences } from '../accounts/audit.ts';
 import { inTransaction } from '../database/connection.ts';
-import { HttpProblem, invalid, notFound, type ProblemItem } from '../http/problem.ts';
+import { invalid, notFound, type ProblemItem } from '../http/problem.ts';
 import { signedIn, type Register } from '../http/route.ts';
 import type { Table } from '../models/table.ts';
 import type { Services } from '../services.ts';
+import { changedMeanwhile, type Stamped } from './changes.ts';
+import type { Reassess } from './reassess.ts';
 
 /** What every stored thing of a farm has, as the database keeps it. */
-export interface KeptRow {
+export interface KeptRow extends Stamped {
   id: string;
   farmId: string;
   name: string;
   version: number;
-  archivedAt: Date | null;
-  createdAt: Date;
-  updatedAt: Date;
 }
 
 type Body = z.ZodObject<{ name: z.ZodString }>;
@@ -38,14 +37,7 @@ export interface Keeping<Row extends KeptRow, Input extends { name: string }, An
   present(rows: Row[], transaction: Transaction | null): Promise<Answer[]>;
 }
 
-/** Instants as text, the rest as it is. */
-export function presentStamps<Row extends { archivedAt: Date | null; createdAt: Date; updatedAt: Date }>(row: Row): Omit<Row, 'archivedAt' | 'createdAt' | 'updatedAt'> & { archivedAt: string | null; createdAt: string; updatedAt: string } {
-  return { ...row, archivedAt: row.archivedAt?.toISOString() ?? null, createdAt: row.createdAt.toISOString(), updatedAt: row.updatedAt.toISOString() };
-}
-
-/** Another person changed the thing since: both versions, so that nothing is lost. */
-export const changedMeanwhile = (theirs: unknown, yours: unknown, at: string): HttpProblem =>
-  new HttpProblem(409, `Someone else changed this on ${at}; compare the two versions and save again.`, undefined, { theirs, yours });
+const archivedWhere = { no: { archivedAt: null }, yes: { archivedAt: { [Op.ne]: null } }, all: {} } as const;
 
 /** Registers list, read, create, update and archive of one kind of thing. `changed` runs after each change is committed. */
 export function keptRoutes<Row extends KeptRow, Input extends { name: string }, Answer extends object>(
@@ -53,11 +45,11 @@ export function keptRoutes<Row extends KeptRow, Input extends { name: string }, 
   services: Services,
   endpoints: ReturnType<typeof keptEndpoints<Body, z.ZodObject>>,
   keeping: Keeping<Row, Input, Answer>,
-  changed: (farmId: string) => Promise<unknown>,
+  changed: Reassess,
 ): void {
   const { sequelize, clock } = services;
   const { table, present } = keeping;
-  const what = endpoints.read.id.replace(/^read/, '').toLowerCase();
+  const what = endpoints.read.id.replace(/^read/, '').replace(/(?<!^)[A-Z]/g, ' $&').toLowerCase();
   const find = async (farmId: string, id: string, transaction: Transaction | null, lock = false) => {
     const row = await table.findOne({ where: { id, farmId } as never, transaction, ...(lock && transaction ? { lock: transaction.LOCK.UPDATE } : {}) });
     if (!row) throw notFound();
@@ -70,22 +62,22 @@ export function keptRoutes<Row extends KeptRow, Input extends { name: string }, 
   };
 
   register(endpoints.list, async ({ params: { farmId }, query: { archived } }) => {
-    const where = { farmId, ...(archived === 'all' ? {} : archived === 'yes' ? {} : { archivedAt: null }) };
-    const rows = (await table.findAll({ where: where as never, order: [['name', 'ASC'], ['id', 'ASC']] })).map((row) => row.get({ plain: true }) as Row);
-    return { items: await present(archived === 'yes' ? rows.filter((row) => row.archivedAt !== null) : rows, null) } as never;
+    const rows = await table.findAll({ where: { farmId, ...archivedWhere[archived] } as never, order: [['name', 'ASC'], ['id', 'ASC']] });
+    return { items: await present(rows.map((row) => row.get({ plain: true }) as Row), null) } as never;
   });
 
   register(endpoints.read, async ({ params: { farmId, id } }) => presentOne((await find(farmId, id, null)).get({ plain: true }) as Row) as never);
 
   register(endpoints.create, async ({ params: { farmId }, body, caller }) => {
     const input = body as unknown as Input;
+    const { userId } = signedIn(caller);
     const answer = await inTransaction(sequelize, async (transaction) => {
       await refuse(input, farmId, transaction);
       const now = clock.now();
-      const row = { ...keeping.defaults, ...keeping.columns(input), id: randomUUID(), farmId, version: 1, archivedAt: null, createdAt: now, updatedAt: now } as unknown as Row;
+      const row = { ...keeping.defaults, ...keeping.columns(input), id: randomUUID(), farmId, version: 1, archivedAt: null, createdAt: now, updatedAt: now, updatedBy: userId } as unknown as Row;
       await table.create(row as never, { transaction });
       await keeping.afterWrite?.(row.id, input, transaction);
-      if (keeping.audited) await audit(services, transaction, { farmId, userId: signedIn(caller).userId, what: `${what} added`, subject: input.name });
+      if (keeping.audited) await audit(services, transaction, { farmId, userId, what: `${what} added`, subject: input.name });
       return presentOne(row, transaction);
     });
     await changed(farmId);
@@ -95,16 +87,17 @@ export function keptRoutes<Row extends KeptRow, Input extends { name: string }, 
   register(endpoints.update, async ({ params: { farmId, id }, body, caller }) => {
     const { version, ...rest } = body as { version?: number };
     const input = rest as unknown as Input;
+    const { userId } = signedIn(caller);
     const answer = await inTransaction(sequelize, async (transaction) => {
       const row = await find(farmId, id, transaction, true);
       const before = row.get({ plain: true }) as Row;
-      if (version !== undefined && version !== before.version) throw changedMeanwhile(await presentOne(before, transaction), input, before.updatedAt.toISOString());
+      if (version !== undefined && version !== before.version) throw await changedMeanwhile(services, before, await presentOne(before, transaction), input, transaction);
       await refuse(input, farmId, transaction);
-      const after = { ...before, ...keeping.columns(input), version: before.version + 1, updatedAt: clock.now() };
+      const after = { ...before, ...keeping.columns(input), version: before.version + 1, updatedAt: clock.now(), updatedBy: userId };
       await row.update(after as never, { transaction });
       await keeping.afterWrite?.(id, input, transaction);
       const changes = differences(before, after, keeping.audited ?? []);
-      if (Object.keys(changes).length > 0) await audit(services, transaction, { farmId, userId: signedIn(caller).userId, what: `${what} changed`, subject: after.name, details: changes });
+      if (Object.keys(changes).length > 0) await audit(services, transaction, { farmId, userId, what: `${what} changed`, subject: after.name, details: changes });
       return presentOne(after, transaction);
     });
     await changed(farmId);
@@ -112,12 +105,16 @@ export function keptRoutes<Row extends KeptRow, Input extends { name: string }, 
   });
 
   register(endpoints.archive, async ({ params: { farmId, id }, body, caller }) => {
+    const { userId } = signedIn(caller);
     const answer = await inTransaction(sequelize, async (transaction) => {
       const row = await find(farmId, id, transaction, true);
       const before = row.get({ plain: true }) as Row;
-      const after = { ...before, archivedAt: body.archived ? (before.archivedAt ?? clock.now()) : null, version: before.version + 1, updatedAt: clock.now() };
+      // Said twice, it is done once.
+      if (body.archived === (before.archivedAt !== null)) return presentOne(before, transaction);
+      const now = clock.now();
+      const after = { ...before, archivedAt: body.archived ? now : null, version: before.version + 1, updatedAt: now, updatedBy: userId };
       await row.update(after as never, { transaction });
-      if (keeping.audited) await audit(services, transaction, { farmId, userId: signedIn(caller).userId, what: `${what} ${body.archived ? 'archived' : 'brought back'}`, subject: after.name });
+      if (keeping.audited) await audit(services, transaction, { farmId, userId, what: `${what} ${body.archived ? 'archived' : 'brought back'}`, subject: after.name });
       return presentOne(after, transaction);
     });
     await changed(farmId);

@@ -13,11 +13,11 @@ const json = express.json({ limit: '512kb' });
 const raw = express.raw({ type: () => true, limit: '2mb' });
 const upload = multer({ storage: multer.memoryStorage(), limits: { fileSize: labelFileBytesMax, files: 1, fields: 5 } }).single('file');
 
-/** A body in another form than the operation reads would else look as if there were none. */
+/** A body in another form than the operation reads would else look as if there were none; an empty one is none. */
 const onlyKind =
   (mediaType: string): RequestHandler =>
   (request, _response, next) => {
-    if (request.is(mediaType) === false) throw new HttpProblem(415, `Send the body as ${mediaType}.`);
+    if (request.get('content-length') !== '0' && request.is(mediaType) === false) throw new HttpProblem(415, `Send the body as ${mediaType}.`);
     next();
   };
 

@@ -1,11 +1,11 @@
 import type { Sequelize } from 'sequelize';
 import type { Block, Farm, SensitivePlace, Sprayer } from '../../shared/api/farms.ts';
 import type { Plan, Product } from '../../shared/api/plans.ts';
-import { day, flag, instant, instantOrNull, integer, integerOrNull, jsonColumn, key, number, numberOrNull, reference, table, text } from './table.ts';
+import { day, flag, instant, instantOrNull, integer, integerOrNull, jsonColumn, key, number, numberOrNull, reference, referenceOrNull, table, text } from './table.ts';
 
 /** The API's shape with its instants as dates, as the database keeps them. */
 type Stamps = 'createdAt' | 'updatedAt' | 'archivedAt';
-type Stored<T> = Omit<T, Stamps> & { createdAt: Date; updatedAt: Date; archivedAt: Date | null };
+type Stored<T> = Omit<T, Stamps> & { createdAt: Date; updatedAt: Date; archivedAt: Date | null; /** Who changed it last; null when that person is gone. */ updatedBy: string | null };
 
 export type FarmRow = Stored<Farm>;
 export type BlockRow = Stored<Block>;
@@ -33,7 +33,7 @@ export interface LabelFileRow {
   uploadedAt: Date;
 }
 
-const stamps = () => ({ version: integer(), archivedAt: instantOrNull(), createdAt: instant(), updatedAt: instant() });
+const stamps = () => ({ version: integer(), archivedAt: instantOrNull(), createdAt: instant(), updatedAt: instant(), updatedBy: referenceOrNull() });
 const kept = () => ({ id: key(), farmId: reference(), ...stamps() });
 
 export const farmTables = (sequelize: Sequelize) => ({

@@ -1,8 +1,11 @@
 import type { Transaction } from 'sequelize';
 import type { z } from 'zod';
 import { planEndpoints, planProblems, type Plan, type planBody } from '../../shared/api/plans.ts';
+import { labelProblems } from '../../shared/rules/plan-label.ts';
 import { jobOfPlan } from '../../shared/tank/minutes.ts';
-import { keptRoutes, presentStamps } from '../farms/kept.ts';
+import { presentStamps } from '../farms/changes.ts';
+import { keptRoutes } from '../farms/kept.ts';
+import { reassessAfterChange } from '../farms/reassess.ts';
 import type { ProblemItem } from '../http/problem.ts';
 import type { Register } from '../http/route.ts';
 import type { PlanRow } from '../models/farms.ts';
@@ -13,20 +16,20 @@ type PlanInput = z.infer<typeof planBody>;
 
 const auditedFigures = ['name', 'firstDate', 'lastDate', 'state', 'bloom', 'windMaxMs', 'windMinMs', 'gustMaxMs', 'inversionMax', 'rainFreeHours', 'rainMm', 'rainProbabilityPct', 'foliageDry', 'deltaTMinC', 'deltaTMaxC', 'temperatureMinC', 'temperatureMaxC', 'reserveMinutes'] as const;
 
-export function planRoutes(register: Register, services: Services, { assessor }: Pick<Parts, 'assessor'>): void {
+export function planRoutes(register: Register, services: Services, parts: Pick<Parts, 'assessor'>): void {
   const { models } = services;
 
-  /** A plan names only things of its own farm that are not archived. */
-  async function unknownThings(input: PlanInput, farmId: string, transaction: Transaction): Promise<ProblemItem[]> {
-    const present = async (table: 'blocks' | 'products' | 'sprayers', ids: string[]): Promise<Set<string>> => {
-      const rows: { id: string }[] = await (models[table] as typeof models.blocks).findAll({ where: { id: ids, farmId, archivedAt: null }, attributes: ['id'], transaction });
-      return new Set(rows.map((row) => row.id));
-    };
-    const [blocks, products, sprayers] = [await present('blocks', input.blockIds), await present('products', input.products.map((entry) => entry.productId)), await present('sprayers', [input.sprayerId])];
+  /** A plan names only things of its own farm that are not archived, and keeps to their labels. */
+  async function problemsOf(input: PlanInput, farmId: string, transaction: Transaction): Promise<ProblemItem[]> {
+    const ours = { farmId, archivedAt: null };
+    const blocks = new Set((await models.blocks.findAll({ where: { ...ours, id: input.blockIds }, attributes: ['id'], transaction })).map((row) => row.id));
+    const products = new Map((await models.products.findAll({ where: { ...ours, id: input.products.map((entry) => entry.productId) }, transaction })).map((row) => [row.id, row]));
+    const sprayer = await models.sprayers.findOne({ where: { ...ours, id: input.sprayerId }, attributes: ['id'], transaction });
     return [
       ...input.blockIds.flatMap((id, index) => (blocks.has(id) ? [] : [{ path: `blockIds.${index}`, message: 'choose a block of this farm that is not archived' }])),
       ...input.products.flatMap((entry, index) => (products.has(entry.productId) ? [] : [{ path: `products.${index}.productId`, message: 'choose a product of this farm that is not archived' }])),
-      ...(sprayers.has(input.sprayerId) ? [] : [{ path: 'sprayerId', message: 'choose a sprayer of this farm that is not archived' }]),
+      ...(sprayer ? [] : [{ path: 'sprayerId', message: 'choose a sprayer of this farm that is not archived' }]),
+      ...labelProblems(input, products),
     ];
   }
 
@@ -51,7 +54,7 @@ export function planRoutes(register: Register, services: Services, { assessor }:
     {
       table: models.plans,
       columns: ({ blockIds: _blocks, products: _products, ...columns }) => columns,
-      check: async (input, farmId, transaction) => [...planProblems(input), ...(await unknownThings(input, farmId, transaction))],
+      check: async (input, farmId, transaction) => [...planProblems(input), ...(await problemsOf(input, farmId, transaction))],
       async afterWrite(planId, input, transaction) {
         await models.planBlocks.destroy({ where: { planId }, transaction });
         await models.planProducts.destroy({ where: { planId }, transaction });
@@ -61,6 +64,6 @@ export function planRoutes(register: Register, services: Services, { assessor }:
       audited: auditedFigures,
       present,
     },
-    (farmId) => assessor.assessFarm(farmId, { fetch: 'never' }),
+    reassessAfterChange(services, parts),
   );
 }

@@ -20,8 +20,10 @@ export interface Moment {
   morning: string;
 }
 
-/** Where the sun neither rises nor reaches civil twilight, dawn is taken at this local time. */
+/** Where the sun neither rises nor reaches civil twilight in the morning, dawn is taken at this local time. */
 const polarDawn = '06:00';
+/** A sun that comes up later than this leaves no morning before local noon: the ends of the polar night. */
+const latestDawn = '11:00';
 const dayMs = 86_400_000;
 
 /**
@@ -46,10 +48,11 @@ function sunOf(date: string, { latitude, longitude, timeZone }: Pick<Place, 'lat
   return days.reduce((nearest, day) => (Math.abs(day.solarNoon.getTime() - noon) < Math.abs(nearest.solarNoon.getTime() - noon) ? day : nearest));
 }
 
-/** Sunrise of a date; where there is none (polar day or night) the beginning of civil twilight, and without that 06:00 local. */
+/** Sunrise of a date; where there is none in the morning (polar day or night) the beginning of civil twilight, and without that 06:00 local. */
 export function daybreakAt(morning: string, place: Pick<Place, 'latitude' | 'longitude' | 'timeZone'>): Date {
   const { sunrise, dawn } = sunOf(morning, place);
-  return sunrise ?? dawn ?? localInstant(morning, polarDawn, place.timeZone);
+  const latest = localInstant(morning, latestDawn, place.timeZone);
+  return [sunrise, dawn].find((at) => at !== null && at <= latest) ?? localInstant(morning, polarDawn, place.timeZone);
 }
 
 /** The dawn notice of a morning. */

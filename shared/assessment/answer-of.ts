@@ -1,4 +1,3 @@
-import { activityBand } from '../pollinators/activity.ts';
 import type { UnitSystem } from '../units/units.ts';
 import type { AssessmentAnswer, AssessmentStep, LimitAtStep, Reason, SprayWindow } from './answer.ts';
 import type { BeeKind } from './case.ts';
@@ -21,7 +20,6 @@ export interface AnswerOptions {
 const valueScale = 1e6;
 const headroomScale = 1e4;
 
-const isoOf = (ms: number | null): string | null => (ms === null ? null : new Date(ms).toISOString());
 const rounded = (value: number): number | null => (Number.isNaN(value) ? null : Math.round(value * valueScale) / valueScale);
 
 /** Turns a judgement into the answer of the contract; the steps are built when they are first read. */
@@ -39,13 +37,7 @@ export function answerOf(judgement: Judgement, options: AnswerOptions = {}): Ass
     bindingLimit: judgement.bindingLimit,
     reasons,
     windows: windowsOf(judgement),
-    sun: {
-      civilDawn: isoOf(layout.sun.civilDawnMs),
-      sunrise: isoOf(layout.sun.sunriseMs),
-      solarNoon: isoOf(layout.sun.solarNoonMs),
-      sunset: isoOf(layout.sun.sunsetMs),
-      localNoon: new Date(layout.localNoonMs).toISOString(),
-    },
+    sun: layout.sunTimes(),
     beeActivity: bandsOf(judgement),
     siteWindFactor: morning.siteFactor,
     get steps() {
@@ -69,12 +61,9 @@ function windowsOf(judgement: Judgement): SprayWindow[] {
 }
 
 function bandsOf({ plan, morning }: Judgement): NonNullable<AssessmentAnswer['beeActivity']> {
-  const { count, startMs } = morning.morning;
-  const timeMs = Float64Array.from({ length: count }, (_, step) => startMs + step * stepMs);
   const bands: NonNullable<AssessmentAnswer['beeActivity']> = {};
   for (const kind of plan.limits.pollinators?.kinds ?? []) {
-    const band = activityBand(timeMs, morning.bees[kind].judged, stepMs);
-    bands[kind] = { possibleFrom: isoOf(band.possibleFromMs), likelyFrom: isoOf(band.likelyFromMs), likelyUntil: isoOf(band.likelyUntilMs), possibleUntil: isoOf(band.possibleUntilMs) };
+    bands[kind] = morning.bees[kind].band();
   }
   return bands;
 }
@@ -83,11 +72,13 @@ function stepsOf(judgement: Judgement): AssessmentStep[] {
   const { morning, tracks, plan } = judgement;
   const times = morning.morning.times();
   const kinds = plan.limits.pollinators?.kinds ?? [];
-  return times.map((time, step) => {
+  const steps: AssessmentStep[] = [];
+  for (let step = 0; step < morning.morning.count; step += 1) {
     const limits: AssessmentStep['limits'] = {};
     for (const track of tracks) limits[track.limit] = atStep(track, step);
-    return { time, sunAltitudeDeg: Math.round(morning.morning.sunAltitudeDeg[step]! * 1e4) / 1e4, limits, inversion: morning.inversion[step]!, pollinators: beesAt(morning, kinds, step) };
-  });
+    steps.push({ time: times[step]!, sunAltitudeDeg: Math.round(morning.morning.sunAltitudeDeg[step]! * 1e4) / 1e4, limits, inversion: morning.inversion[step]!, pollinators: beesAt(morning, kinds, step) });
+  }
+  return steps;
 }
 
 function atStep(track: Track, step: number): LimitAtStep {

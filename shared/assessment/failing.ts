@@ -7,8 +7,8 @@ import type { Judgement } from './verdict.ts';
 
 const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value);
 
-/** Start of a step as UTC ISO 8601; the end of the last step for the number after it. */
-export const isoAt = ({ morning: { morning } }: Judgement, step: number): string => morning.times()[step] ?? new Date(morning.startMs + step * stepMs).toISOString();
+/** Start of a step as UTC ISO 8601; the number after the last step gives its end. */
+export const isoAt = ({ morning: { morning } }: Judgement, step: number): string => morning.times()[step]!;
 
 const placeAt = (judgement: Judgement, track: Track, step: number): string | null =>
   track.limit === 'towardSensitivePlace' ? (nearestDownwindPlace(judgement.plan, judgement.morning.direction.fromDeg[step]!)?.name ?? null) : null;

@@ -1,5 +1,6 @@
 import { dewPointFromHumidityC, relativeHumidityPct } from '../atmosphere/humidity.ts';
 import type { ForecastHour } from './case.ts';
+import { column } from './columns.ts';
 
 export const hourMs = 3_600_000;
 
@@ -37,30 +38,44 @@ const known = (value: number | null): number => value ?? NaN;
  * @param hours in order, start of hour in UTC @param startMs start of the grid, on the hour, epoch ms @param count hours of the grid
  */
 export function tableOf(hours: readonly ForecastHour[], startMs: number, count: number): HourTable {
-  const column = (): Float64Array => new Float64Array(count).fill(NaN);
   const table: HourTable = {
     startMs,
     count,
-    temperatureC: column(),
-    dewPointC: column(),
-    windMs: column(),
-    windFromDeg: column(),
-    cloudPct: column(),
-    gustOfMs: column(),
-    rainOfMm: column(),
-    rainChanceOfPct: column(),
-    radiationOfWm2: column(),
+    temperatureC: column(count).fill(NaN),
+    dewPointC: column(count).fill(NaN),
+    windMs: column(count).fill(NaN),
+    windFromDeg: column(count).fill(NaN),
+    cloudPct: column(count).fill(NaN),
+    gustOfMs: column(count).fill(NaN),
+    rainOfMm: column(count).fill(NaN),
+    rainChanceOfPct: column(count).fill(NaN),
+    radiationOfWm2: column(count).fill(NaN),
     contradictions: new Set(),
     isEmpty: true,
   };
   const first = firstAtOrAfter(hours, startMs);
   for (let index = first; index < hours.length; index += 1) {
     const hour = hours[index]!;
-    const at = (Date.parse(hour.time) - startMs) / hourMs;
+    const at = (hourStartMs(hour.time) - startMs) / hourMs;
     if (at >= count) break;
     fill(table, at, hour);
   }
   return table;
+}
+
+let dayText = '';
+let dayMs = 0;
+
+/**
+ * Start of an hour, epoch ms. Hours come in order, so the day is parsed once for all of its hours.
+ * @param time UTC ISO 8601 on the hour, as the schema of hours demands
+ */
+export function hourStartMs(time: string): number {
+  if (!time.startsWith(dayText) || dayText === '') {
+    dayText = time.slice(0, 11);
+    dayMs = Date.parse(`${dayText}00:00:00Z`);
+  }
+  return dayMs + ((time.charCodeAt(11) - 48) * 10 + time.charCodeAt(12) - 48) * hourMs;
 }
 
 /** Index of the first hour not before an instant; hours are in order. */
@@ -69,7 +84,7 @@ function firstAtOrAfter(hours: readonly ForecastHour[], instantMs: number): numb
   let high = hours.length;
   while (low < high) {
     const middle = (low + high) >> 1;
-    if (Date.parse(hours[middle]!.time) < instantMs) low = middle + 1;
+    if (hourStartMs(hours[middle]!.time) < instantMs) low = middle + 1;
     else high = middle;
   }
   return low;

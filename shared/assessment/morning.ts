@@ -1,6 +1,7 @@
 import { clearSkyHaurwitzWm2 } from '../atmosphere/radiation/haurwitz.ts';
 import { sunAltitudeDeg, sunTimesNear, type SunTimes } from '../sun/sun.ts';
-import { localInstantMs, zoneOffsetMinutes } from '../units/time-zone.ts';
+import { localInstantMs } from '../units/time-zone.ts';
+import type { AssessmentAnswer } from './answer.ts';
 import type { Site } from './case.ts';
 import { hourMs } from './hours.ts';
 
@@ -22,13 +23,18 @@ export interface Morning {
   hourCount: number;
   /** Steps between `firstHourMs` and `startMs`. */
   offsetSteps: number;
+  /** Sun's altitude at any instant, degrees, without refraction; each instant is computed once for all members and plans. */
+  sunAltitudeDegAt(epochMs: number): number;
   /** Sun's altitude at the start of each step, degrees, without refraction. */
   sunAltitudeDeg: Float64Array;
   /** Clear-sky radiation at each step, and its mean over each hour touched, W/m² [haurwitz1945]. */
   clearSkyWm2: Float64Array;
   clearSkyOfHourWm2: Float64Array;
-  /** Start of each step, UTC ISO 8601. */
+  /** Start of each step and the end of the last, epoch ms and UTC ISO 8601; made when first asked for. */
+  stepStartsMs(): Float64Array;
   times(): readonly string[];
+  /** Sun times as the answer tells them. */
+  sunTimes(): AssessmentAnswer['sun'];
 }
 
 /**
@@ -48,11 +54,17 @@ export function morningOf(site: Site, date: string): Morning {
   const firstHourMs = count > 0 ? Math.floor(startMs / hourMs) * hourMs : Math.floor(localNoonMs / hourMs) * hourMs;
   const hourCount = count > 0 ? Math.ceil((startMs + count * stepMs - firstHourMs) / hourMs) : 0;
   const offsetSteps = count > 0 ? (startMs - firstHourMs) / stepMs : 0;
+  const known = new Map<number, number>();
+  const altitudeAt = (epochMs: number): number => {
+    let degrees = known.get(epochMs);
+    if (degrees === undefined) known.set(epochMs, (degrees = sunAltitudeDeg(epochMs, site.latitude, site.longitude)));
+    return degrees;
+  };
   const altitude = new Float64Array(count);
   const clearSky = new Float64Array(count);
   const clearSkyOfHour = new Float64Array(hourCount);
   for (let grid = 0; grid < hourCount * stepsPerHour; grid += 1) {
-    const degrees = sunAltitudeDeg(firstHourMs + grid * stepMs, site.latitude, site.longitude);
+    const degrees = altitudeAt(firstHourMs + grid * stepMs);
     const clear = clearSkyHaurwitzWm2(degrees);
     const hour = Math.floor(grid / stepsPerHour);
     clearSkyOfHour[hour] = clearSkyOfHour[hour]! + clear / stepsPerHour;
@@ -61,7 +73,9 @@ export function morningOf(site: Site, date: string): Morning {
     altitude[step] = degrees;
     clearSky[step] = clear;
   }
+  let starts: Float64Array | null = null;
   let times: string[] | null = null;
+  let told: AssessmentAnswer['sun'] | null = null;
   return {
     site,
     date,
@@ -72,15 +86,14 @@ export function morningOf(site: Site, date: string): Morning {
     firstHourMs,
     hourCount,
     offsetSteps,
+    sunAltitudeDegAt: altitudeAt,
     sunAltitudeDeg: altitude,
     clearSkyWm2: clearSky,
     clearSkyOfHourWm2: clearSkyOfHour,
-    times: () => (times ??= Array.from({ length: count }, (_, step) => new Date(startMs + step * stepMs).toISOString())),
+    stepStartsMs: () => (starts ??= Float64Array.from({ length: count }, (_, step) => startMs + step * stepMs)),
+    times: () => (times ??= Array.from({ length: count + 1 }, (_, step) => new Date(startMs + step * stepMs).toISOString())),
+    sunTimes: () => (told ??= { civilDawn: isoOf(sun.civilDawnMs), sunrise: isoOf(sun.sunriseMs), solarNoon: isoOf(sun.solarNoonMs), sunset: isoOf(sun.sunsetMs), localNoon: new Date(localNoonMs).toISOString() }),
   };
 }
 
-/** Minutes by the local clock since midnight of the morning's date; 1440 and more on the next day. */
-export function clockMinutes(morning: Pick<Morning, 'date' | 'site'>, epochMs: number): number {
-  const wallMs = epochMs + zoneOffsetMinutes(epochMs, morning.site.timeZone) * 60_000;
-  return Math.round((wallMs - Date.parse(`${morning.date}T00:00:00Z`)) / 60_000);
-}
+const isoOf = (ms: number | null): string | null => (ms === null ? null : new Date(ms).toISOString());

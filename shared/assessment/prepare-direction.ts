@@ -1,4 +1,5 @@
 import { directionMean } from '../atmosphere/wind-direction.ts';
+import { column } from './columns.ts';
 import type { HourTable } from './hours.ts';
 import type { Morning } from './morning.ts';
 
@@ -29,8 +30,8 @@ export function halfAngleOf(windMs: number): number {
 
 /** Wind direction on the steps as a unit vector between the hours, with a half-angle that covers the turn from hour to hour. */
 export function prepareDirection(morning: Morning, table: HourTable, windMs: Float64Array): DirectionSteps {
-  const fromDeg = new Float64Array(morning.count).fill(NaN);
-  const halfAngleDeg = new Float64Array(morning.count);
+  const fromDeg = column(morning.count).fill(NaN);
+  const halfAngleDeg = column(morning.count);
   let hourOfTurn = -1;
   let turnDeg = 0;
   for (let step = 0; step < morning.count; step += 1) {

@@ -5,9 +5,9 @@ import { radiationUnderCloudWm2 } from '../atmosphere/radiation/kasten-czeplak.t
 import { saturationVapourPressureKpa } from '../atmosphere/saturation-vapour-pressure.ts';
 import type { StabilityClass } from '../atmosphere/stability-turner.ts';
 import { deltaTC } from '../atmosphere/wet-bulb.ts';
-import { sunAltitudeDeg } from '../sun/sun.ts';
 import type { BeeKind, ForecastHour, Reading, Site } from './case.ts';
-import { prepareBees } from './prepare-bees.ts';
+import { column } from './columns.ts';
+import { prepareBees, type BeeSteps } from './prepare-bees.ts';
 import { prepareDirection, type DirectionSteps } from './prepare-direction.ts';
 import { hourMs, tableOf, type HourTable } from './hours.ts';
 import { morningOf, stepMs, type Morning } from './morning.ts';
@@ -47,8 +47,7 @@ export interface PreparedMorning {
   inversionLikelihood: Float64Array;
   foliageWetness: Float64Array;
   foliageDriesAt(afterMs: number): number | null;
-  /** Activity as shown, and as judged: where radiation is missing the judged one takes the brightest sky the sun allows. */
-  bees: Readonly<Record<BeeKind, { shown: Float64Array; judged: Float64Array }>>;
+  bees: Readonly<Record<BeeKind, BeeSteps>>;
 }
 
 /** What a morning is prepared from. */
@@ -63,7 +62,7 @@ export interface Weather {
 
 /** Interpolates an hourly state onto the steps; unknown wherever one of the two hours is. */
 function onSteps(morning: Morning, hourly: Float64Array, factor = 1): Float64Array {
-  const steps = new Float64Array(morning.count);
+  const steps = column(morning.count);
   for (let step = 0; step < morning.count; step += 1) {
     const grid = step + morning.offsetSteps;
     const hour = Math.floor(grid / stepsPerHour);
@@ -86,10 +85,9 @@ export function prepareMorning(weather: Weather, morning: Morning = morningOf(we
   const temperatureC = onSteps(morning, table.temperatureC);
   const windMs = onSteps(morning, table.windMs, siteFactor?.factor ?? 1);
   const sky = radiationOnSteps(morning, table);
-  const altitudeAt = (epochMs: number): number => sunAltitudeDeg(epochMs, site.latitude, site.longitude);
-  const inversion = onInversionSteps(morning, prepareInversion({ site, hours, sunAltitudeDegAt: altitudeAt }));
-  const foliage = prepareFoliage({ site, hours, sunAltitudeDegAt: altitudeAt });
-  const foliageWetness = new Float64Array(morning.count);
+  const inversion = onInversionSteps(morning, prepareInversion({ site, hours, sunAltitudeDegAt: morning.sunAltitudeDegAt }));
+  const foliage = prepareFoliage({ site, hours, sunAltitudeDegAt: morning.sunAltitudeDegAt });
+  const foliageWetness = column(morning.count);
   for (let step = 0; step < morning.count; step += 1) foliageWetness[step] = foliage.at(morning.startMs + step * stepMs).wetness ?? NaN;
   return {
     morning,
@@ -103,7 +101,7 @@ export function prepareMorning(weather: Weather, morning: Morning = morningOf(we
     radiationWm2: sky.radiationWm2,
     radiationIsEstimated: sky.isEstimated,
     inversion,
-    inversionLikelihood: Float64Array.from(inversion, ({ likelihood }) => likelihood ?? NaN),
+    inversionLikelihood: likelihoodsOf(inversion),
     foliageWetness,
     foliageDriesAt: (afterMs) => foliage.driesAt(afterMs),
     bees: prepareBees(morning, table, { temperatureC, windMs, radiationWm2: sky.radiationWm2, brightestWm2: sky.brightestWm2 }),
@@ -116,9 +114,15 @@ function onInversionSteps(morning: Morning, prepared: { at(epochMs: number): Inv
   return steps;
 }
 
+function likelihoodsOf(inversion: readonly InversionStep[]): Float64Array {
+  const likelihoods = column(inversion.length);
+  for (let step = 0; step < inversion.length; step += 1) likelihoods[step] = inversion[step]!.likelihood ?? NaN;
+  return likelihoods;
+}
+
 function gustsOnSteps(morning: Morning, table: HourTable, windMs: Float64Array, siteFactor: SiteWindFactor | null): Float64Array {
   const raise = Math.max(1, siteFactor?.factor ?? 1);
-  const gusts = new Float64Array(morning.count);
+  const gusts = column(morning.count);
   for (let step = 0; step < morning.count; step += 1) {
     const gust = table.gustOfMs[Math.floor((step + morning.offsetSteps) / stepsPerHour)]! * raise;
     // Math.max gives NaN when either is unknown: a gust cannot be told without the wind that it is checked against.
@@ -130,8 +134,13 @@ function gustsOnSteps(morning: Morning, table: HourTable, windMs: Float64Array, 
 function deltaTOnSteps(morning: Morning, table: HourTable, temperatureC: Float64Array): Float64Array {
   const pressureKpa = stationPressureKpa(morning.site.elevationM);
   const dewPoint = onSteps(morning, table.dewPointC);
-  const deltaT = new Float64Array(morning.count);
-  for (let step = 0; step < morning.count; step += 1) deltaT[step] = deltaTC(temperatureC[step]!, saturationVapourPressureKpa(dewPoint[step]!), pressureKpa);
+  const deltaT = column(morning.count);
+  let depression = NaN;
+  for (let step = 0; step < morning.count; step += 1) {
+    // Five minutes change little: the step before gives the first guess.
+    depression = deltaTC(temperatureC[step]!, saturationVapourPressureKpa(dewPoint[step]!), pressureKpa, depression);
+    deltaT[step] = depression;
+  }
   return deltaT;
 }
 
@@ -145,10 +154,10 @@ interface Sky {
 /** An hour's mean radiation is spread over its steps in proportion to the clear-sky radiation, so that the hour's sum stays. */
 function radiationOnSteps(morning: Morning, table: HourTable): Sky {
   const cloud = onSteps(morning, table.cloudPct);
-  const clearness = new Float64Array(morning.hourCount);
+  const clearness = column(morning.hourCount);
   for (let hour = 0; hour < morning.hourCount; hour += 1) clearness[hour] = clearnessOf(table, hour, morning.clearSkyOfHourWm2[hour]!);
-  const radiationWm2 = new Float64Array(morning.count);
-  const brightestWm2 = new Float64Array(morning.count);
+  const radiationWm2 = column(morning.count);
+  const brightestWm2 = column(morning.count);
   let isEstimated = false;
   for (let step = 0; step < morning.count; step += 1) {
     const hour = Math.floor((step + morning.offsetSteps) / stepsPerHour);

@@ -1,6 +1,6 @@
 import { windProfileFactor } from '../atmosphere/wind-profile.ts';
 import type { ForecastHour, Reading } from './case.ts';
-import { hourMs } from './hours.ts';
+import { hourMs, hourStartMs } from './hours.ts';
 
 export interface SiteWindFactor {
   /** Wind at the site over the forecast's wind, at equal height. */
@@ -31,7 +31,7 @@ function median(values: number[]): number {
 export function learnSiteWindFactor(hours: readonly ForecastHour[], readings: readonly Reading[]): SiteWindFactor | null {
   if (readings.length < leastReadings) return null;
   const windAt = new Map<number, number>();
-  for (const hour of hours) if (hour.windSpeed10mMs !== null) windAt.set(Date.parse(hour.time), hour.windSpeed10mMs);
+  for (const hour of hours) if (hour.windSpeed10mMs !== null) windAt.set(hourStartMs(hour.time), hour.windSpeed10mMs);
   const ratios: number[] = [];
   for (const reading of readings) {
     if (reading.windSpeedMs === null) continue;

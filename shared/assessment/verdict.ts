@@ -1,4 +1,5 @@
 import { limitNames, type LimitName } from './answer.ts';
+import { column } from './columns.ts';
 import { limitJudges } from './limits/index.ts';
 import type { PreparedMorning } from './prepare.ts';
 import type { PlanToJudge, Track } from './track.ts';
@@ -39,7 +40,7 @@ export function decide(morning: PreparedMorning, plan: PlanToJudge): Judgement {
     if (track) tracks.push(track);
   }
   const count = morning.morning.count;
-  const least = new Float64Array(count);
+  const least = column(count);
   const leastTrack = new Int8Array(count).fill(-1);
   const isUntold = new Uint8Array(count);
   const isOpen = new Uint8Array(count);

@@ -9,15 +9,17 @@ export const wetBulbValidity = { temperatureC: [-5, 55], pressureKpa: [45, 108] 
  * @param temperatureC air temperature in shade, °C
  * @param vapourPressureKpa actual vapour pressure, kPa, at most saturated
  * @param pressureKpa station pressure, kPa
+ * @param guessC a near value, when one is known; saves steps
  * @returns °C; NaN outside the validity
  */
-export function wetBulbC(temperatureC: number, vapourPressureKpa: number, pressureKpa: number): number {
+export function wetBulbC(temperatureC: number, vapourPressureKpa: number, pressureKpa: number, guessC = NaN): number {
   if (!within(temperatureC, wetBulbValidity.temperatureC) || !within(pressureKpa, wetBulbValidity.pressureKpa) || !(vapourPressureKpa > 0)) return NaN;
   const saturated = saturationVapourPressureKpa(temperatureC);
   if (vapourPressureKpa >= saturated) return temperatureC;
   const ratio = (0.621945 * vapourPressureKpa) / (pressureKpa - vapourPressureKpa);
   // First guess from the plain psychrometer line; two or three steps then reach 1e-4 °C.
-  let wet = temperatureC - (saturated - vapourPressureKpa) / ((4098 * saturated) / (temperatureC + 237.3) ** 2 + 0.000662 * pressureKpa);
+  let wet = guessC;
+  if (!(wet <= temperatureC)) wet = temperatureC - (saturated - vapourPressureKpa) / ((4098 * saturated) / (temperatureC + 237.3) ** 2 + 0.000662 * pressureKpa);
   if (wet < -35) wet = -35;
   for (let turn = 0; turn < 8; turn += 1) {
     const es = 0.6108 * Math.exp((17.27 * wet) / (wet + 237.3));
@@ -35,6 +37,7 @@ export function wetBulbC(temperatureC: number, vapourPressureKpa: number, pressu
 /**
  * Delta T: dry bulb less wet bulb, the evaporation guide of spray work [grdc103].
  * @param temperatureC °C @param vapourPressureKpa kPa @param pressureKpa station pressure, kPa
+ * @param guessC a near Delta T, when one is known; saves steps
  * @returns °C, 0 or more; NaN outside the validity of the wet bulb
  */
-export const deltaTC = (temperatureC: number, vapourPressureKpa: number, pressureKpa: number): number => temperatureC - wetBulbC(temperatureC, vapourPressureKpa, pressureKpa);
+export const deltaTC = (temperatureC: number, vapourPressureKpa: number, pressureKpa: number, guessC = NaN): number => temperatureC - wetBulbC(temperatureC, vapourPressureKpa, pressureKpa, temperatureC - guessC);

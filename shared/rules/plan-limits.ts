@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import type { planBody, productBody } from '../api/plans.ts';
 import { beeKinds, beeStatements, type Limits } from '../assessment/case.ts';
+import { windAtHeightMs } from '../atmosphere/wind-profile.ts';
 
 type Plan = Pick<
   z.infer<typeof planBody>,
@@ -25,20 +26,43 @@ function given<T extends object>(limits: T): { [K in keyof T]: Exclude<T[K], und
   return Object.fromEntries(Object.entries(limits).filter(([, value]) => value !== undefined)) as { [K in keyof T]: Exclude<T[K], undefined> };
 }
 
+/** Height at which the grower's own wind figures are meant: where a person measures (the height of FAO-56's u2). */
+export const ownWindHeightM = 2;
+
+interface WindFigure {
+  windMs: number;
+  heightM: number;
+}
+const figure = (windMs: number | null, heightM: number): WindFigure[] => (windMs === null ? [] : [{ windMs, heightM }]);
+const atOwnHeight = ({ windMs, heightM }: WindFigure): number => windAtHeightMs(windMs, heightM, ownWindHeightM);
+
+/** The figure that lets the least through, compared at one height [fao56, eq. 47]; of equals the first. */
+function binding(figures: readonly WindFigure[], stricter: (a: number, b: number) => boolean): WindFigure | undefined {
+  return figures.reduce<WindFigure | undefined>((best, next) => (best === undefined || stricter(atOwnHeight(next), atOwnHeight(best)) ? next : best), undefined);
+}
+
+/** Wind figures of different heights: the height is the binding greatest wind's (else the binding least wind's), the other figure is brought to it. */
+function windLimits(greatestWinds: readonly WindFigure[], leastWinds: readonly WindFigure[]): Pick<Limits, 'windMaxMs' | 'windMinMs'> & { windHeightM: number } {
+  const max = binding(greatestWinds, (a, b) => a < b);
+  const min = binding(leastWinds, (a, b) => a > b);
+  const windHeightM = max?.heightM ?? min?.heightM ?? ownWindHeightM;
+  return { windHeightM, ...(max ? { windMaxMs: max.windMs } : {}), ...(min ? { windMinMs: windAtHeightMs(min.windMs, min.heightM, windHeightM) } : {}) };
+}
+
 /**
  * The limits of a plan: for each condition the strictest of its products' labels and the grower's own.
- * Wind figures are taken at the greatest height that a label with a wind figure names: wind grows with height, so a figure meant
- * lower down is then only held more strictly. The label in hand is the law; this only carries what was entered from it.
+ * The label in hand is the law; this only carries what was entered from it.
+ * @returns m/s, °C, hours, mm, %; wind figures at `windHeightM`, gusts as forecast; what nobody limits is left out and not judged
  */
 export function limitsOfPlan(plan: Plan, labels: readonly Label[]): Limits {
   const strictest = beeStatements[Math.max(0, ...labels.map((label) => beeStatements.indexOf(label.beeStatement)))]!;
   const prohibited = labels.some((label) => label.inversionProhibited) ? inversionProhibitedMax : null;
-  const windLabels = labels.filter((label) => label.windMaxMs !== null || label.windMinMs !== null || label.gustMaxMs !== null);
   return given({
-    windMaxMs: least([plan.windMaxMs, ...labels.map((label) => label.windMaxMs)]),
-    windMinMs: greatest([plan.windMinMs, ...labels.map((label) => label.windMinMs)]),
+    ...windLimits(
+      [...labels.flatMap((label) => figure(label.windMaxMs, label.windHeightM)), ...figure(plan.windMaxMs, ownWindHeightM)],
+      [...labels.flatMap((label) => figure(label.windMinMs, label.windHeightM)), ...figure(plan.windMinMs, ownWindHeightM)],
+    ),
     gustMaxMs: least([plan.gustMaxMs, ...labels.map((label) => label.gustMaxMs)]),
-    windHeightM: greatest(windLabels.map((label) => label.windHeightM)) ?? 2,
     inversionMax: least([plan.inversionMax, prohibited]),
     rainFreeHours: greatest([plan.rainFreeHours, ...labels.map((label) => label.rainFreeHours)]),
     rainMm: plan.rainMm,
@@ -52,11 +76,14 @@ export function limitsOfPlan(plan: Plan, labels: readonly Label[]): Limits {
   });
 }
 
-/** Limits for a morning that no plan covers: 10 mph at 2 m, some air moving, no inversion, four dry hours. Common practice, no source. */
+/**
+ * Limits for a morning that no plan covers, not from any label: wind of 3–10 mph (the range that extension advice and several
+ * labels give, Univ. of Tennessee herbicide stewardship among them), here at 2 m; no likely inversion; the rest common practice, no source.
+ */
 export const usualLimits: Limits = {
   windMaxMs: 4.4704,
-  windMinMs: 0.67056,
-  windHeightM: 2,
+  windMinMs: 1.34112,
+  windHeightM: ownWindHeightM,
   inversionMax: inversionProhibitedMax,
   rainFreeHours: 4,
   rainMm: 0.2,

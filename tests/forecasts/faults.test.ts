@@ -75,6 +75,8 @@ describe.each(all)('when %s has its troubles', (id) => {
     scene.fakes.setMood(id, 'denied');
     expect(await failure(id)).toMatchObject({ kind: 'http', status: 403 });
     expect(asked(forecastCall[id])).toBe(1);
+    // Whoever refuses is up: the circuit stays closed, however often it happens.
+    for (let turn = 0; turn < 4; turn += 1) expect(await failure(id)).toMatchObject({ status: 403 });
   });
 
   it('a page of HTML with status 200 is no forecast', async () => {

@@ -3,7 +3,7 @@ import { setupServer } from 'msw/node';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { SettableClock } from '../../server/clock/clock.ts';
 import { canonicalHours, memberSuffixes, openMeteoSchema, placeOf } from '../../server/forecasts/adapters/open-meteo-answer.ts';
-import { caseFromForecast } from '../../server/forecasts/case-from-forecast.ts';
+import { caseFromForecast, readAnswer } from '../../server/forecasts/case-from-forecast.ts';
 import { createProviders } from '../../server/forecasts/create-providers.ts';
 import { caseSchema } from '../../shared/assessment/case.ts';
 import { hourMs, hourOf, issued, noRealAnswers, realAnswer, userAgent } from './support.ts';
@@ -163,15 +163,20 @@ describe('a real answer of Open-Meteo', () => {
   });
 });
 
-describe('a real answer as an assessment case', () => {
-  const rest = { minutesNeeded: 30, reserveMinutes: 10, limits: { windMaxMs: 4.47, windMinMs: 0.67, rainFreeHours: 4 } };
-  it('is accepted by the contract of `npm run assess`', async (context) => {
-    const [points, grid] = [realAnswer('nws/points.json'), realAnswer('nws/detailed_forecast.json')];
-    if (!points || !grid) return context.skip(noRealAnswers);
-    serveNws(points, grid, 'TAE/58,65');
-    const forecast = issued(await providersAt('2022-02-04T04:10:00Z').nws.fetch({ latitude: 30, longitude: -85, elevationM: 5 }, null, signal));
-    const made = caseFromForecast(forecast.hours, { ...rest, date: '2022-02-05', site: { latitude: 30, longitude: -85, elevationM: 5, timeZone: 'America/New_York' } });
-    expect(made.hours).toHaveLength(forecast.hours.length);
-    expect(() => caseFromForecast(forecast.hours, { ...rest, date: 'tomorrow', site: made.site })).toThrow(/date/);
+describe('a real answer of each provider as an assessment case', () => {
+  const frame = { minutesNeeded: 30, reserveMinutes: 10, limits: { windMaxMs: 4.47, windMinMs: 0.67, rainFreeHours: 4 } };
+  it.for([
+    ['nws', 'nws/detailed_forecast.json', '2022-02-05', 'America/New_York', 180],
+    ['metNorway', 'metno/lat51.5lon-0.1altitude25_complete.json', '2020-07-21', 'Europe/London', 200],
+    ['openMeteo', 'open_meteo/forecast_height_levels.json', '2026-10-04', 'Europe/London', 24],
+  ] as const)('(%s) is accepted by the contract of `npm run assess`', ([provider, file, date, timeZone, atLeast], context) => {
+    const text = realAnswer(file);
+    if (!text) return context.skip(noRealAnswers);
+    const body = JSON.parse(text) as { data?: unknown };
+    const { place, hours } = readAnswer(provider, body.data ?? body);
+    expect(hours.length).toBeGreaterThanOrEqual(atLeast);
+    const site = { ...place, elevationM: place.elevationM ?? 0, timeZone };
+    expect(caseFromForecast(hours, { ...frame, site, date }).hours).toEqual(hours);
+    expect(() => caseFromForecast(hours, { ...frame, site, date: 'tomorrow' })).toThrow(/date/);
   });
 });

@@ -64,6 +64,10 @@ describe('a farm’s forecast', () => {
     scene.step(0.2);
     const back = await fetchForecast(scene.providers, place, { provider, validators });
     expect([back.answer.kind, back.provider, back.standInBecause]).toEqual(['issued', 'openMeteo', null]);
+    // Another's date of last change would make MET Norway keep its own forecast to itself.
+    const other = await fetchForecast([scene.provider('metNorway')], place, { provider: 'nws', validators: { etag: '"x"', lastModified: scene.clock.now().toUTCString() } });
+    expect(other.answer.kind).toBe('issued');
+    expect(scene.fakes.requests.at(-1)!.headers).not.toHaveProperty('if-modified-since');
   });
 
   it('stops asking when the asker gives up, instead of going on to the next', async () => {

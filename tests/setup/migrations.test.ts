@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { select } from '../../server/database/connection.ts';
-import { migrateDown, migrateUp } from '../../server/database/migrate.ts';
+import { createDatabase, select } from '../../server/database/connection.ts';
+import { migrateDown, migrateUp, migrationNames } from '../../server/database/migrate.ts';
 import { createTestDatabase, type TestDatabase } from '../support/database.ts';
 
 let database: TestDatabase;
@@ -29,6 +29,24 @@ describe('the schema', () => {
     expect(await schema()).toEqual({});
     await migrateUp(database.sequelize);
     expect(await schema()).toEqual(before);
+  });
+
+  it('goes back to a named step and up again', async () => {
+    const before = await schema();
+    const last = migrationNames().at(-1)!;
+    expect(await migrateDown(database.sequelize, last)).toEqual([last]);
+    expect(await schema()).not.toEqual(before);
+    expect(await migrateUp(database.sequelize)).toEqual([last]);
+    expect(await schema()).toEqual(before);
+  });
+
+  it('is brought up by one process when several start at once', async () => {
+    await migrateDown(database.sequelize);
+    const others = [createDatabase(database.url), createDatabase(database.url), createDatabase(database.url)];
+    const taken = await Promise.all(others.map(migrateUp));
+    expect(taken.flat()).toEqual(migrationNames());
+    expect(taken.filter((steps) => steps.length > 0)).toHaveLength(1);
+    await Promise.all(others.map((other) => other.close()));
   });
 
   it('keeps every table in utf8mb4', async () => {

@@ -1,6 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { execute, inTransaction, select } from '../../server/database/connection.ts';
-import { migrateUp } from '../../server/database/migrate.ts';
 import { createTestDatabase, type TestDatabase } from '../support/database.ts';
 
 let database: TestDatabase;
@@ -74,10 +73,4 @@ describe('a connection', () => {
     expect(await execute(database.sequelize, 'DELETE FROM counters WHERE id = 11')).toBe(1);
   });
 
-  it('of several processes that bring one schema up to date at once lets one do it', async () => {
-    const other = await createTestDatabase();
-    const steps = await Promise.all([migrateUp(other.sequelize), migrateUp(other.sequelize), migrateUp(other.sequelize)]);
-    expect(steps.flat()).toEqual([]);
-    await other.drop();
-  });
 });

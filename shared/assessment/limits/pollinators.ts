@@ -1,4 +1,5 @@
 import { leastActivityInBloom, possibleActivity } from '../../pollinators/thresholds.ts';
+import { column, mapColumn } from '../columns.ts';
 import { below, type LimitJudge } from '../track.ts';
 
 /**
@@ -13,7 +14,7 @@ export const judgePollinators: LimitJudge = ({ morning, bees }, { limits }) => {
   if (!rule) return null;
   const isHard = rule.bloom && rule.beeStatement !== 'none';
   const isForbidden = rule.bloom && rule.beeStatement === 'notInBloom';
-  const value = new Float64Array(morning.count).fill(rule.bloom ? leastActivityInBloom : 0);
+  const value = column(morning.count).fill(rule.bloom ? leastActivityInBloom : 0);
   for (const kind of rule.kinds) {
     const activity = bees[kind].judged;
     // Math.max passes NaN on: one kind that cannot be told leaves the greatest untold.
@@ -21,7 +22,7 @@ export const judgePollinators: LimitJudge = ({ morning, bees }, { limits }) => {
   }
   if (isHard && !isForbidden) keepStarted(value);
   const bound = isForbidden ? 0 : possibleActivity;
-  const headroom = isForbidden ? new Float64Array(morning.count).fill(-1) : value.map((activity) => (activity >= possibleActivity ? startedHeadroom(activity) : below(activity, possibleActivity)));
+  const headroom = isForbidden ? column(morning.count).fill(-1) : mapColumn(value, (activity) => (activity >= possibleActivity ? startedHeadroom(activity) : below(activity, possibleActivity)));
   return { limit: 'pollinators', value, bound, headroom, isHard };
 };
 

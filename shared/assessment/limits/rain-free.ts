@@ -1,3 +1,4 @@
+import { column } from '../columns.ts';
 import { hourMs, type HourTable } from '../hours.ts';
 import { stepMinutes } from '../morning.ts';
 import { clampHeadroom, type LimitJudge, type PlanToJudge } from '../track.ts';
@@ -45,7 +46,7 @@ export const judgeRainFree: LimitJudge = ({ morning, hours }, plan) => {
   if (needed === undefined) return null;
   const states = hourStates(hours, plan);
   // From each hour on: hours until the first that is not dry, and what that one is.
-  const until = new Float64Array(hours.count + 1);
+  const until = column(hours.count + 1);
   const endedBy = new Uint8Array(hours.count + 1).fill(unknown);
   for (let hour = hours.count - 1; hour >= 0; hour -= 1) {
     if (states[hour] === dry) {
@@ -53,8 +54,8 @@ export const judgeRainFree: LimitJudge = ({ morning, hours }, plan) => {
       endedBy[hour] = endedBy[hour + 1]!;
     } else endedBy[hour] = states[hour]!;
   }
-  const value = new Float64Array(morning.count);
-  const headroom = new Float64Array(morning.count);
+  const value = column(morning.count);
+  const headroom = column(morning.count);
   const mostPct = plan.limits.rainChanceMaxPct;
   for (let step = 0; step < morning.count; step += 1) {
     const grid = step + morning.offsetSteps;

@@ -1,3 +1,4 @@
+import { column } from '../columns.ts';
 import { between, type LimitJudge } from '../track.ts';
 
 /** Degrees from a bound that count as at ease: ours, no source. */
@@ -6,8 +7,8 @@ const easeDeltaTC = 2;
 
 function judgeRange(limit: 'temperature' | 'deltaT', values: Float64Array, min: number | undefined, max: number | undefined, ease: number): ReturnType<LimitJudge> {
   if (min === undefined && max === undefined) return null;
-  const headroom = new Float64Array(values.length);
-  const bound = new Float64Array(values.length);
+  const headroom = column(values.length);
+  const bound = column(values.length);
   for (let step = 0; step < values.length; step += 1) {
     const at = between(values[step]!, min, max, ease);
     headroom[step] = at.headroom;

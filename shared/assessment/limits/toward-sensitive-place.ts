@@ -1,6 +1,7 @@
 import { angleBetweenDeg } from '../../atmosphere/wind-direction.ts';
 import { driftReachPerWindS, usualReleaseHeightM } from '../../droplets/drift-reach.ts';
 import type { DropletClass } from '../../droplets/classes.ts';
+import { column } from '../columns.ts';
 import { clampHeadroom, type LimitJudge, type PlanToJudge } from '../track.ts';
 
 /** With the wind unknown a place is only out of reach beyond the reach of this wind. */
@@ -33,9 +34,9 @@ export const judgeTowardSensitivePlace: LimitJudge = ({ morning, windMs, directi
   const places = plan.sensitivePlaces ?? [];
   if (places.length === 0) return null;
   const perWind = reachOf(plan);
-  const value = new Float64Array(morning.count);
-  const bound = new Float64Array(morning.count);
-  const headroom = new Float64Array(morning.count);
+  const value = column(morning.count);
+  const bound = column(morning.count);
+  const headroom = column(morning.count);
   for (let step = 0; step < morning.count; step += 1) {
     const wind = windMs[step]!;
     const reachM = perWind * wind;

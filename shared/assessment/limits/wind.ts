@@ -1,11 +1,12 @@
 import { windProfileFactor } from '../../atmosphere/wind-profile.ts';
+import { mapColumn } from '../columns.ts';
 import { above, below, type LimitJudge, type PlanToJudge } from '../track.ts';
 import type { PreparedMorning } from '../prepare.ts';
 
 /** Mean wind at the height that the label's figures are meant for, m/s. */
 function windAtLabelHeight({ windMs }: PreparedMorning, { limits }: PlanToJudge): Float64Array {
   const factor = windProfileFactor(10, limits.windHeightM);
-  return windMs.map((wind) => wind * factor);
+  return mapColumn(windMs, (wind) => wind * factor);
 }
 
 /** Mean wind against the label's greatest, at the label's height [fao56, eq. 47]. */
@@ -13,7 +14,7 @@ export const judgeWind: LimitJudge = (morning, plan) => {
   const max = plan.limits.windMaxMs;
   if (max === undefined) return null;
   const value = windAtLabelHeight(morning, plan);
-  return { limit: 'wind', value, bound: max, headroom: value.map((wind) => below(wind, max)), isHard: true };
+  return { limit: 'wind', value, bound: max, headroom: mapColumn(value, (wind) => below(wind, max)), isHard: true };
 };
 
 /** Mean wind against the least: dead-calm dawn air is inversion air. */
@@ -21,7 +22,7 @@ export const judgeStillAir: LimitJudge = (morning, plan) => {
   const min = plan.limits.windMinMs;
   if (min === undefined) return null;
   const value = windAtLabelHeight(morning, plan);
-  return { limit: 'stillAir', value, bound: min, headroom: value.map((wind) => above(wind, min)), isHard: true };
+  return { limit: 'stillAir', value, bound: min, headroom: mapColumn(value, (wind) => above(wind, min)), isHard: true };
 };
 
 /**
@@ -31,5 +32,5 @@ export const judgeStillAir: LimitJudge = (morning, plan) => {
 export const judgeGusts: LimitJudge = ({ gustMs }, { limits }) => {
   const max = limits.gustMaxMs;
   if (max === undefined) return null;
-  return { limit: 'gusts', value: gustMs, bound: max, headroom: gustMs.map((gust) => below(gust, max)), isHard: true };
+  return { limit: 'gusts', value: gustMs, bound: max, headroom: mapColumn(gustMs, (gust) => below(gust, max)), isHard: true };
 };

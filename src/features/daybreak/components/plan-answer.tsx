@@ -1,0 +1,38 @@
+import type { Daybreak, PlanVerdict } from '../../../../shared/api/mornings.ts';
+import { VerdictSign } from '../../../components/index.ts';
+import { useFarm, useMay, useReader } from '../../../lib/session/session.ts';
+import { minutesText, stateOf, why, windowText } from '../../../lib/verdict-text.ts';
+import { nextStep } from '../next-step.ts';
+import { NextStepLink } from './next-step-link.tsx';
+
+const stateWords = { go: 'Go', hold: 'Hold', unknown: 'Hold' } as const;
+
+/** The answer for one plan: the sign, the word in big type, why, and what to do next. */
+export function PlanAnswer({ daybreak, verdict }: { daybreak: Daybreak; verdict: PlanVerdict }) {
+  const { id: farmId } = useFarm();
+  const may = useMay();
+  const reader = useReader();
+  const state = stateOf(verdict);
+  const window = windowText(verdict, reader);
+  const step = nextStep(daybreak, verdict, reader, { refresh: may('run', 'morning'), plan: may('create', 'plan') });
+  return (
+    <section aria-label={verdict.planName}>
+      <div className="flex items-center gap-4">
+        <VerdictSign state={state} size={84} silent />
+        <p>
+          <span className="answer block">
+            {stateWords[state]}
+            {window && <span className="sr-only">, </span>}
+          </span>
+          {window && <span className="block text-2xl font-semibold whitespace-nowrap">{window}</span>}
+          {state === 'unknown' && <span className="block text-xl font-semibold">not enough to tell</span>}
+        </p>
+      </div>
+      <p className="mt-3 font-semibold">{verdict.planName}</p>
+      <p>{why(verdict, reader)}</p>
+      {state !== 'unknown' && <p className="text-ink-soft">{minutesText(verdict)}</p>}
+      <p className="mt-2">{step.text}</p>
+      <NextStepLink farmId={farmId} step={step} />
+    </section>
+  );
+}

@@ -1,0 +1,47 @@
+import { useSuspenseQuery } from '@tanstack/react-query';
+import { ForecastNote, StaleBanner } from '../../../components/forecast-facts.tsx';
+import { EmptyState, PageHeading } from '../../../components/index.ts';
+import { useFarm } from '../../../lib/session/session.ts';
+import { longDate } from '../../../lib/time.ts';
+import { daybreakQuery } from '../api/get-daybreak.ts';
+import { leadOf, NextMornings } from '../components/next-mornings.tsx';
+import { OtherPlans } from '../components/other-plans.tsx';
+import { PlanAnswer } from '../components/plan-answer.tsx';
+import { morningName } from '../next-step.ts';
+
+/** The first page: the coming morning's answer, and the five after it. */
+export function DaybreakPage() {
+  const { id: farmId } = useFarm();
+  const { data: daybreak } = useSuspenseQuery(daybreakQuery(farmId));
+  const { mornings, forecast, stale, now, timeZone } = daybreak;
+  const [first, ...rest] = mornings;
+  const lead = first && leadOf(first.verdicts);
+  if (!first || !lead) {
+    return (
+      <>
+        <PageHeading title="Daybreak" />
+        <EmptyState>The first mornings are being worked out. This takes a moment after a farm is opened.</EmptyState>
+      </>
+    );
+  }
+  const name = morningName(first.date, now, timeZone);
+  const others = first.verdicts.filter((verdict) => verdict !== lead);
+  return (
+    <>
+      {stale && <StaleBanner forecast={forecast} now={now} />}
+      <PageHeading title={name} {...(name === longDate(first.date) ? {} : { over: longDate(first.date) })} />
+      <div className="lg:grid lg:grid-cols-[3fr_2fr] lg:gap-12">
+        <div>
+          <PlanAnswer daybreak={daybreak} verdict={lead} />
+          {others.length > 0 && <OtherPlans verdicts={others} />}
+        </div>
+        <section aria-label="The mornings after" className="mt-4 lg:mt-0">
+          <NextMornings mornings={rest} />
+          <div className="mt-3">
+            <ForecastNote forecast={forecast} stale={stale} now={now} />
+          </div>
+        </section>
+      </div>
+    </>
+  );
+}
