@@ -8,6 +8,8 @@ const spacingH = 64.3;
 const delayHPerDeg = 2.2;
 /** No forecast puts a front further off than this, hours; it also keeps neighbouring fronts in order. */
 const furthestShiftH = 11;
+/** Damp spells err in time like fronts do, under a number that no front has. */
+const dampIndex = 1_000_003;
 
 interface Front {
   index: number;
@@ -42,7 +44,7 @@ const bump = (tauH: number, before: number, after: number): number => (tauH < 0 
 
 /** The sky's procession for one seed; a place sees it later the further east it lies. */
 export function createSynoptic(seed: number, longitude: number): (atMs: number, view: View) => Synoptic {
-  const keys = { time: stream(seed, 'front time'), strength: stream(seed, 'front strength'), rain: stream(seed, 'front rain'), width: stream(seed, 'front width'), before: stream(seed, 'bearing before'), after: stream(seed, 'bearing after'), texture: stream(seed, 'rain texture'), wind: stream(seed, 'gradient wind'), cloud: stream(seed, 'cloud'), scud: stream(seed, 'scud'), air: stream(seed, 'air mass'), dry: stream(seed, 'dryness') };
+  const keys = { time: stream(seed, 'front time'), strength: stream(seed, 'front strength'), rain: stream(seed, 'front rain'), width: stream(seed, 'front width'), before: stream(seed, 'bearing before'), after: stream(seed, 'bearing after'), texture: stream(seed, 'rain texture'), wind: stream(seed, 'gradient wind'), cloud: stream(seed, 'cloud'), scud: stream(seed, 'scud'), air: stream(seed, 'air mass'), dry: stream(seed, 'dryness'), damp: stream(seed, 'damp spell'), drizzle: stream(seed, 'drizzle') };
   const delayMs = longitude * delayHPerDeg * hourMs;
   const known = new Map<number, Front>();
 
@@ -81,6 +83,7 @@ export function createSynoptic(seed: number, longitude: number): (atMs: number, 
       frontalRainChance: 0,
       unsettled: 0,
     };
+    lieDamp(felt, atMs, view);
     let [north, east] = [0, 0];
     for (let position = 0; position < near.length; position += 1) {
       const one = near[position]!;
@@ -101,6 +104,16 @@ export function createSynoptic(seed: number, longitude: number): (atMs: number, 
     felt.cloudFraction = Math.min(1, Math.max(0, felt.cloudFraction));
     return felt;
   };
+
+  /** Now and then low cloud settles in for a day, with drizzle out of it and everything wet below. */
+  function lieDamp(felt: Synoptic, atMs: number, view: View): void {
+    const damp = rise(0.85, 1.6, drift(keys.damp, atMs / hourMs / 38 - view.frontShiftH(dampIndex, atMs) / 38));
+    if (damp === 0) return;
+    felt.cloudFraction += 0.75 * damp;
+    felt.drynessC -= 3.6 * damp;
+    felt.frontalRainMmPerH += 0.4 * damp * Math.max(0, drift(keys.drizzle, atMs / hourMs / 2.5));
+    felt.frontalRainChance = 0.5 * damp;
+  }
 
   function rainOf(felt: Synoptic, one: Front, tauH: number, atMs: number, view: View): void {
     const doubtH = Math.min(furthestShiftH / 2, view.frontDoubtH(atMs));

@@ -22,6 +22,19 @@ export const leaseTime = (clock: Clock | undefined): LeaseTime => (clock ? { sql
 /** Blanks the text of a letter that has reached its end. */
 export const blanked = `payload = IF(delivery_key LIKE '${letterPrefix}%', '{}', payload)`;
 
+/**
+ * Rows of one channel that may be claimed: due, and no older message of their order under way.
+ * The index is forced: a scan of the table would lock other channels' rows for a moment, and SKIP LOCKED would hide them from their own lane.
+ */
+const dueRows = `FROM deliveries d FORCE INDEX (deliveries_due)
+          WHERE d.state = 'waiting' AND d.channel = :channel AND d.next_attempt_at <= :now
+            AND (d.order_key IS NULL OR NOT EXISTS (SELECT 1 FROM deliveries older WHERE older.order_key = d.order_key AND older.state = 'claimed' AND older.sequence < d.sequence))`;
+
+/** Whether something of a channel could be claimed, were it not locked for the moment by someone else. */
+export async function anythingDue({ sequelize, clock }: Services, channel: Channel): Promise<boolean> {
+  return (await select(sequelize, `SELECT 1 ${dueRows} LIMIT 1`, { channel, now: clock.now() })).length > 0;
+}
+
 interface Row {
   id: string;
   notice_id: string | null;
@@ -64,9 +77,7 @@ export async function claim(services: Services, worker: string, channel: Channel
       const rows = await select<Row>(
         sequelize,
         `SELECT d.id, d.notice_id, d.farm_id, d.target, d.delivery_key, d.order_key, d.sequence, d.payload, d.attempts, d.due_at, d.useful_until, d.created_at
-           FROM deliveries d
-          WHERE d.state = 'waiting' AND d.channel = :channel AND d.next_attempt_at <= :now ${busy.length > 0 ? 'AND d.id NOT IN (:busy)' : ''}
-            AND (d.order_key IS NULL OR NOT EXISTS (SELECT 1 FROM deliveries older WHERE older.order_key = d.order_key AND older.state = 'claimed' AND older.sequence < d.sequence))
+           ${dueRows} ${busy.length > 0 ? 'AND d.id NOT IN (:busy)' : ''}
           ORDER BY d.next_attempt_at, d.id
           LIMIT :max FOR UPDATE SKIP LOCKED`,
         { channel, now, max, busy },
@@ -139,7 +150,7 @@ export async function takeBack(services: Services, lease: LeaseTime, busy: strin
     async (transaction) => {
       const rows = await select<{ id: string }>(
         sequelize,
-        `SELECT id FROM deliveries WHERE state = 'claimed' AND lease_until < ${lease.sql} ${busy.length > 0 ? 'AND id NOT IN (:busy)' : ''} LIMIT 200 FOR UPDATE SKIP LOCKED`,
+        `SELECT id FROM deliveries FORCE INDEX (deliveries_lease) WHERE state = 'claimed' AND lease_until < ${lease.sql} ${busy.length > 0 ? 'AND id NOT IN (:busy)' : ''} LIMIT 200 FOR UPDATE SKIP LOCKED`,
         { busy, ...lease.values() },
         transaction,
       );

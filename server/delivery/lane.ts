@@ -1,3 +1,4 @@
+import type { Channel } from '../../shared/api/notices.ts';
 import type { Services } from '../services.ts';
 import { claim, type LeaseTime } from './claims.ts';
 import { clipped, type ClaimedDelivery, type Outcome, type Sender } from './sender.ts';
@@ -17,6 +18,10 @@ export class Lane {
     this.#sender = sender;
     this.#settler = settler;
     this.#settings = settings;
+  }
+
+  get channel(): Channel {
+    return this.#sender.channel;
   }
 
   get busy(): string[] {

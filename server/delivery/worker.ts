@@ -3,7 +3,7 @@ import { hostname } from 'node:os';
 import type { Clock } from '../clock/clock.ts';
 import { select } from '../database/connection.ts';
 import type { Services } from '../services.ts';
-import { leaseTime, renew, takeBack } from './claims.ts';
+import { anythingDue, leaseTime, renew, takeBack } from './claims.ts';
 import { Lane } from './lane.ts';
 import type { Sender } from './sender.ts';
 import { Settler } from './settler.ts';
@@ -42,6 +42,8 @@ export interface DeliveryWorker {
 }
 
 const stuckAfterMs = 60_000;
+/** So often `drain` looks again at rows that others have locked. */
+const lockedLooksMax = 100;
 
 /** Makes a worker over the channels given; a channel without a sender stays in the outbox for another worker. */
 export function createDeliveryWorker(services: Services, senders: Sender[], options: WorkerOptions = {}): DeliveryWorker {
@@ -104,12 +106,19 @@ export function createDeliveryWorker(services: Services, senders: Sender[], opti
 
   async function drainLane(lane: Lane): Promise<boolean> {
     let any = false;
-    for (;;) {
+    for (let locked = 0; locked < lockedLooksMax; ) {
       const taken = await pass(lane);
       any ||= taken > 0 || lane.busy.length > 0;
-      if (taken === 0 && lane.busy.length === 0) return any;
-      if (taken === 0 || lane.busy.length >= batch) await lane.oneDone();
+      if (taken > 0) locked = 0;
+      if (lane.busy.length > 0 && (taken === 0 || lane.busy.length >= batch)) await lane.oneDone();
+      else if (taken === 0) {
+        if (!(await anythingDue(services, lane.channel))) return any;
+        // Someone has a lock on it for the moment.
+        locked += 1;
+        await new Promise((resolve) => setTimeout(resolve, 20));
+      }
     }
+    return any;
   }
 
   async function drain(): Promise<void> {

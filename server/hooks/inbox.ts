@@ -32,7 +32,7 @@ export function createInbox(services: Services, assessor: Assessor): Inbox {
       async (transaction) => {
         const rows = await select<Row>(
           sequelize,
-          `SELECT source_id, message_id, body, tries FROM inbound_messages
+          `SELECT source_id, message_id, body, tries FROM inbound_messages FORCE INDEX (inbound_messages_waiting)
             WHERE processed_at IS NULL AND (claimed_until IS NULL OR claimed_until <= :now) ORDER BY received_at LIMIT ${atOnce} FOR UPDATE SKIP LOCKED`,
           { now },
           transaction,

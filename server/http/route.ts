@@ -1,6 +1,7 @@
 import type { Express, Request, RequestHandler, Response } from 'express';
 import type { z } from 'zod';
 import { allEndpoints } from '../../shared/api/index.ts';
+import { plainMessages } from '../../shared/api/messages.ts';
 import type { Endpoint } from '../../shared/api/endpoint.ts';
 import type { Role } from '../../shared/rules/authorization.ts';
 import { authorize, type Caller } from '../accounts/caller.ts';
@@ -34,7 +35,7 @@ export type Handler<E extends Endpoint> = (context: Context<E>) => Promise<z.inp
 export type Register = <E extends Endpoint>(endpoint: E, handler: Handler<E>) => void;
 
 function parsePart(schema: z.ZodType, value: unknown, prefix: string, problems: ProblemItem[]): unknown {
-  const parsed = schema.safeParse(value);
+  const parsed = schema.safeParse(value, { error: plainMessages });
   if (parsed.success) return parsed.data;
   problems.push(...problemsOf(parsed.error).map((item) => ({ ...item, path: [prefix, item.path].filter(Boolean).join('.') })));
   return undefined;

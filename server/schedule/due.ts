@@ -29,7 +29,7 @@ export async function takeDue(services: Services, max: number): Promise<DueMomen
         due.push(
           ...(await select<Row>(
             sequelize,
-            `SELECT farm_id, kind, due_at, DATE_FORMAT(morning, '%Y-%m-%d') AS morning, tries FROM moments WHERE run_at <= :now AND kind IN (:kinds) ORDER BY run_at, farm_id LIMIT :max FOR UPDATE SKIP LOCKED`,
+            `SELECT farm_id, kind, due_at, DATE_FORMAT(morning, '%Y-%m-%d') AS morning, tries FROM moments FORCE INDEX (moments_due) WHERE run_at <= :now AND kind IN (:kinds) ORDER BY run_at, farm_id LIMIT :max FOR UPDATE SKIP LOCKED`,
             { now, kinds, max: max - due.length },
             transaction,
           )),

@@ -1,23 +1,4 @@
-/** Every address of the client once: as the router's pattern, and as a builder of links. */
-export const patterns = {
-  home: '/',
-  signIn: '/sign-in',
-  signUp: '/sign-up',
-  confirm: '/confirm',
-  forgot: '/forgot',
-  reset: '/reset',
-  invitation: '/invitation',
-  account: '/account',
-  newFarm: '/farms/new',
-  farm: '/farms/:farmId',
-  morning: 'mornings/:date',
-  plans: 'plans',
-  shelf: 'shelf',
-  settings: 'farm',
-  notices: 'notices',
-  people: 'people',
-  demo: '/demo',
-} as const;
+/** Builders of links to the pages of app/router.tsx. */
 
 /** Lists of things that a farm keeps, and where each thing has its pages. */
 function kept(base: (farmId: string) => string) {

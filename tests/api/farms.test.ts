@@ -117,8 +117,8 @@ describe('a product', () => {
     const { browser, at } = await owner();
     const { body } = await browser.post(at('/products')).send(product).expect(201);
     await browser.put(at(`/products/${body.id}`)).send({ ...product, windMaxMs: 4 }).expect(200);
-    const [entry] = (await browser.get(at('/audit'))).body.items;
-    expect(entry).toMatchObject({ what: 'product changed', details: { windMaxMs: { before: null, after: 4 } } });
+    const { items } = (await browser.get(at('/audit'))).body;
+    expect(items.find((entry: { what: string }) => entry.what === 'product changed')).toMatchObject({ subject: product.name, details: { windMaxMs: { before: null, after: 4 } } });
   });
 });
 

@@ -79,3 +79,9 @@ export async function subscribeToPush(publicKey: string): Promise<PushAddress> {
   if (!endpoint || !keys?.['p256dh'] || !keys['auth']) throw new PushRefused('This browser gave an address that cannot be used. Try another browser.');
   return { endpoint, keys: { p256dh: keys['p256dh'], auth: keys['auth'] } };
 }
+
+/** Tells the service worker where it is enabled, so that it can renew a subscription that the browser drops. */
+export async function rememberDevice(farmId: string, name: string): Promise<void> {
+  const { active } = await navigator.serviceWorker.ready;
+  active?.postMessage({ type: 'deviceEnabled', farmId, name });
+}

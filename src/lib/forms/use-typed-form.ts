@@ -4,7 +4,7 @@ import { useForm, type DefaultValues, type FieldErrors, type FieldValues, type P
 import { z } from 'zod';
 import { isApiProblem, type FieldProblem } from '../api/problem.ts';
 import { useUnits } from '../session/session.ts';
-import { plainMessages } from './messages.ts';
+import { plainMessages } from '../../../shared/api/messages.ts';
 import { unitsOf, inOwnUnits, type Quantity } from '../quantities.ts';
 import { bodyFrom, typedFrom, type NumberFields, type Typed } from './typed.ts';
 
@@ -92,9 +92,9 @@ export function useTypedForm<Body extends object>({ schema, more, numbers, store
   });
 
   /** What a field needs: how it registers, the problem beside it, and the unit behind its number. */
-  function bind(name: Path<Values>): Bound {
+  function bind(name: Path<Values>, { emptyIsNull = false }: { emptyIsNull?: boolean } = {}): Bound {
     const quantity = (numbers as Record<string, Quantity>)[starred(name)];
-    return { registration: form.register(name), problem: form.getFieldState(name, form.formState).error?.message, unit: quantity ? unitsOf[quantity][units].name : '', numeric: quantity !== undefined };
+    return { registration: emptyIsNull ? form.register(name, { setValueAs: (value: unknown) => (value === '' ? null : value) as never }) : form.register(name), problem: form.getFieldState(name, form.formState).error?.message, unit: quantity ? unitsOf[quantity][units].name : '', numeric: quantity !== undefined };
   }
 
   return { form, submit, bind, formProblem, units, busy: form.formState.isSubmitting };

@@ -46,7 +46,7 @@ function OneReading({ now, done }: { now: string; done: () => void }) {
       <Fields hint="Hold the meter up for a minute and take the mean. Burn a smoke emitter or throw dust up: smoke that hangs in a layer is an inversion.">
         <NumberField {...form.bind('windMs')} label="Wind" />
         <NumberField {...form.bind('windFromDeg')} label="Wind from" unit="°" hint="0 is north, 90 east." />
-        <ChoiceField {...form.bind('hangTest')} label="What smoke or dust did" choices={[['', 'Not tried'], ...choices(hangTestWords)]} />
+        <ChoiceField {...form.bind('hangTest', { emptyIsNull: true })} label="What smoke or dust did" choices={[['', 'Not tried'], ...choices(hangTestWords)]} />
       </Fields>
       <MoreFields legend="More to enter">
         <NumberField {...form.bind('windHeightM')} label="Height of the wind meter" required />

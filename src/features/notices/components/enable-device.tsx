@@ -3,7 +3,7 @@ import { useState } from 'react';
 import { Button, useToast } from '../../../components/index.ts';
 import { useFarm } from '../../../lib/session/session.ts';
 import { pushKeyQuery, useAddDevice } from '../api/devices.ts';
-import { guessDeviceName, readPushState, subscribeToPush, type PushState } from '../push.ts';
+import { guessDeviceName, readPushState, rememberDevice, subscribeToPush, type PushState } from '../push.ts';
 
 const explanations: Record<Exclude<PushState, 'ask' | 'granted'>, string> = {
   unsupported: 'This browser cannot receive a push. Use a current browser on your phone, or have the notices sent by e-mail below.',
@@ -26,7 +26,9 @@ export function EnableDevice() {
     setProblem(null);
     try {
       const address = await subscribeToPush(await client.ensureQueryData(pushKeyQuery));
-      await add.mutateAsync({ name: guessDeviceName(navigator.userAgent), ...address });
+      const name = guessDeviceName(navigator.userAgent);
+      await add.mutateAsync({ name, ...address });
+      await rememberDevice(farmId, name);
       toast('This device is enabled. Send it a test notice to be sure.');
     } catch (error) {
       setProblem(error instanceof Error ? error.message : 'That did not work. Try again.');
