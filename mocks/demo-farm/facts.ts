@@ -47,7 +47,7 @@ const invented = 'Invented example for the demo: not a real product. Replace it 
 export const demoProducts: Record<'mite' | 'scab' | 'oil', z.input<typeof productBody>> = {
   mite: {
     name: 'Example Mite 12 SC', activeIngredients: 'an invented acaricide', moaSystem: 'IRAC', moaGroup: '10A', rateMin: 2, rateMax: 4, rateUnit: 'flOzPerAcre', carrierMinLHa: 8 * gallonsPerAcre, carrierMaxLHa: 40 * gallonsPerAcre,
-    windMaxMs: 10 * mph, windMinMs: 1.5 * mph, windHeightM: 2, gustMaxMs: 16 * mph, inversionProhibited: true, rainFreeHours: 4, temperatureMinC: fahrenheit(42), temperatureMaxC: fahrenheit(86), beeStatement: 'notWhileForaging', reiHours: 12, phiDays: 14,
+    windMaxMs: 10 * mph, windMinMs: 1 * mph, windHeightM: 2, gustMaxMs: 20 * mph, inversionProhibited: true, rainFreeHours: 4, temperatureMinC: fahrenheit(42), temperatureMaxC: fahrenheit(86), beeStatement: 'notWhileForaging', reiHours: 12, phiDays: 14,
     maxApplicationsPerSeason: 2, maxRatePerSeason: 8, minIntervalDays: 21, notes: invented,
   },
   scab: {
@@ -56,7 +56,7 @@ export const demoProducts: Record<'mite' | 'scab' | 'oil', z.input<typeof produc
   },
   oil: {
     name: 'Example Summer Oil', activeIngredients: 'an invented refined oil', moaSystem: 'none', moaGroup: '', rateMin: 64, rateMax: 128, rateUnit: 'flOzPerAcre', carrierMinLHa: 20 * gallonsPerAcre, carrierMaxLHa: 80 * gallonsPerAcre,
-    windMaxMs: 8 * mph, windMinMs: 1.5 * mph, windHeightM: 2, inversionProhibited: true, rainFreeHours: 3, temperatureMinC: fahrenheit(45), temperatureMaxC: fahrenheit(82), beeStatement: 'none', reiHours: 4, phiDays: 0, notes: invented,
+    windMaxMs: 9 * mph, windMinMs: 1 * mph, windHeightM: 2, inversionProhibited: true, rainFreeHours: 3, temperatureMinC: fahrenheit(45), temperatureMaxC: fahrenheit(82), beeStatement: 'none', reiHours: 4, phiDays: 0, notes: invented,
   },
 };
 
@@ -70,7 +70,7 @@ type PlanFacts = Omit<z.input<typeof planBody>, 'blockIds' | 'products' | 'spray
 };
 
 export const demoPlans: PlanFacts[] = [
-  { name: 'Mites on the ridge', target: 'Spruce spider mite', blocks: ['ridge'], mix: [['mite', 3]], sprayer: 'pack', carrierLHa: 14 * gallonsPerAcre, from: -12, to: 4, reserveMinutes: 10, bloom: true },
-  { name: 'Scab cover, brook', target: 'Apple scab', blocks: ['brook'], mix: [['scab', 4]], sprayer: 'pack', carrierLHa: 20 * gallonsPerAcre, from: 0, to: 6, reserveMinutes: 10, foliageDry: true },
+  { name: 'Mites on the ridge', target: 'Spruce spider mite', blocks: ['ridge'], mix: [['mite', 3]], sprayer: 'pack', carrierLHa: 14 * gallonsPerAcre, from: -12, to: 4, reserveMinutes: 10 },
+  { name: 'Scab cover, brook', target: 'Apple scab', blocks: ['brook'], mix: [['scab', 4]], sprayer: 'pack', carrierLHa: 20 * gallonsPerAcre, from: 1, to: 6, reserveMinutes: 10, bloom: true },
   { name: 'Adelgid oil, yard', target: 'Spruce gall adelgid', blocks: ['yard'], mix: [['oil', 96]], sprayer: 'second', carrierLHa: 30 * gallonsPerAcre, from: 5, to: 18, reserveMinutes: 15 },
 ];

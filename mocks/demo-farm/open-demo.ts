@@ -16,7 +16,7 @@ export const demoOpensAt = DateTime.fromISO('2026-06-09T19:00:00', { zone: demoT
 /** Days lived through before it opens, so that every page has a past. */
 const daysBefore = 9;
 /** Decides the weather of the demo. */
-export const demoSeed = 11;
+export const demoSeed = 18;
 
 export interface OpenedDemo {
   /** The services with the demo's clock and hosts. */

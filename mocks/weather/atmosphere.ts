@@ -95,9 +95,10 @@ export function createAtmosphere(place: WeatherPlace): (atMs: number, view: View
     // Mixing: 0 when the surface air lies still under the inversion, 1 when the wind aloft comes down.
     const mixing = rise(day.onsetH, day.onsetH + day.rampH, sinceRiseH) * rise(-0.7, 2.2, beforeSetH) * (0.65 + 0.35 * summer) * (1 - 0.3 * cloud);
     const gradient = Math.max(0.3, above.gradientWindMs * (1.08 - 0.16 * summer) + view.error('gradientWindMs', atMs));
-    const coupling = Math.min(0.62, Math.max(0.05, 0.06 + 0.18 * cloud + 0.032 * gradient + view.error('couplingFraction', atMs)));
+    const coupling = Math.min(0.62, Math.max(0.04, 0.05 + 0.14 * cloud + 0.0038 * gradient ** 2 + view.error('couplingFraction', atMs)));
     const steadyMs = gradient * (coupling + Math.max(0, 0.84 - coupling) * mixing) + 0.3 * (1 - mixing);
-    const windSpeed10mMs = Math.max(0, steadyMs + (0.15 + 0.09 * steadyMs) * drift(keys.turbulence, atMs / hourMs / 0.7) + view.error('localWindMs', atMs) * Math.min(1.3, 0.35 + 0.25 * steadyMs));
+    const gusty = (0.15 + 0.09 * steadyMs) * drift(keys.turbulence, atMs / hourMs / 0.7);
+    const windSpeed10mMs = softPlus(steadyMs + gusty + view.error('localWindMs', atMs) * Math.min(1.3, 0.35 + 0.25 * steadyMs), 0.15);
 
     // Showers: where readiness passes a changing threshold; far ahead only the readiness is known.
     const sinceNoonH = (atMs - day.noonMs) / hourMs;

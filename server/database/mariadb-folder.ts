@@ -1,7 +1,7 @@
 import { execFile } from 'node:child_process';
 import { existsSync, mkdirSync, readFileSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { userInfo } from 'node:os';
-import { dirname, join } from 'node:path';
+import { basename, dirname, join } from 'node:path';
 import { SetupError, saysDiskFull, sentenceOf } from '../setup/setup-error.mjs';
 import { lastLine } from './mariadb-reasons.ts';
 
@@ -38,9 +38,10 @@ export async function layOut(dataFolder: string): Promise<void> {
 function install(folder: string): Promise<void> {
   const { username } = userInfo();
   // root may come in through the socket only, and only as the system's user.
-  const args = ['--no-defaults', `--datadir=${folder}`, `--user=${username}`, '--auth-root-authentication-method=socket', `--auth-root-socket-user=${username}`, '--skip-test-db', redoLog];
+  // The script stumbles over spaces in a path: it gets the folder's own name and is run beside it.
+  const args = ['--no-defaults', `--datadir=./${basename(folder)}`, `--user=${username}`, '--auth-root-authentication-method=socket', `--auth-root-socket-user=${username}`, '--skip-test-db', redoLog];
   return new Promise((resolve, reject) => {
-    execFile('mariadb-install-db', args, { env: programEnvironment(), maxBuffer: 16 * 1024 * 1024 }, (error, stdout, stderr) => {
+    execFile('mariadb-install-db', args, { cwd: dirname(folder), env: programEnvironment(), maxBuffer: 16 * 1024 * 1024 }, (error, stdout, stderr) => {
       if (!error) {
         resolve();
         return;

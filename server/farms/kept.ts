@@ -6,7 +6,7 @@ import { audit, differences } from '../accounts/audit.ts';
 import { inTransaction } from '../database/connection.ts';
 import { invalid, notFound, type ProblemItem } from '../http/problem.ts';
 import { signedIn, type Register } from '../http/route.ts';
-import type { Table } from '../models/table.ts';
+import { snapshot, type Table } from '../models/table.ts';
 import type { Services } from '../services.ts';
 import { changedMeanwhile, type Stamped } from './changes.ts';
 import type { Reassess } from './reassess.ts';
@@ -63,10 +63,10 @@ export function keptRoutes<Row extends KeptRow, Input extends { name: string }, 
 
   register(endpoints.list, async ({ params: { farmId }, query: { archived } }) => {
     const rows = await table.findAll({ where: { farmId, ...archivedWhere[archived] } as never, order: [['name', 'ASC'], ['id', 'ASC']] });
-    return { items: await present(rows.map((row) => row.get({ plain: true }) as Row), null) } as never;
+    return { items: await present(rows.map((row) => snapshot<Row>(row)), null) } as never;
   });
 
-  register(endpoints.read, async ({ params: { farmId, id } }) => presentOne((await find(farmId, id, null)).get({ plain: true }) as Row) as never);
+  register(endpoints.read, async ({ params: { farmId, id } }) => presentOne(snapshot<Row>(await find(farmId, id, null))) as never);
 
   register(endpoints.create, async ({ params: { farmId }, body, caller }) => {
     const input = body as unknown as Input;
@@ -90,7 +90,7 @@ export function keptRoutes<Row extends KeptRow, Input extends { name: string }, 
     const { userId } = signedIn(caller);
     const answer = await inTransaction(sequelize, async (transaction) => {
       const row = await find(farmId, id, transaction, true);
-      const before = row.get({ plain: true }) as Row;
+      const before = snapshot<Row>(row);
       if (version !== undefined && version !== before.version) throw await changedMeanwhile(services, before, await presentOne(before, transaction), input, transaction);
       await refuse(input, farmId, transaction);
       const after = { ...before, ...keeping.columns(input), version: before.version + 1, updatedAt: clock.now(), updatedBy: userId };
@@ -108,7 +108,7 @@ export function keptRoutes<Row extends KeptRow, Input extends { name: string }, 
     const { userId } = signedIn(caller);
     const answer = await inTransaction(sequelize, async (transaction) => {
       const row = await find(farmId, id, transaction, true);
-      const before = row.get({ plain: true }) as Row;
+      const before = snapshot<Row>(row);
       // Said twice, it is done once.
       if (body.archived === (before.archivedAt !== null)) return presentOne(before, transaction);
       const now = clock.now();

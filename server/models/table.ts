@@ -13,6 +13,9 @@ export function table<Row extends object>(sequelize: Sequelize, name: string, co
   return sequelize.define(name, columns as never, { tableName: name, underscored: true, timestamps: false, freezeTableName: true }) as unknown as Table<Row>;
 }
 
+/** A row's columns as they are now, on their own: Sequelize's plain object may be its inner one, which later changes with it. */
+export const snapshot = <Row extends object>(row: RowModel<Row>): Row => ({ ...(row.get({ plain: true }) as Row) });
+
 export const text = (length = 255): ModelAttributeColumnOptions => ({ type: DataTypes.STRING(length), allowNull: false });
 export const textOrNull = (length = 255): ModelAttributeColumnOptions => ({ type: DataTypes.STRING(length), allowNull: true });
 export const key = (): ModelAttributeColumnOptions => ({ type: DataTypes.CHAR(36), allowNull: false, primaryKey: true });

@@ -10,6 +10,7 @@ import { reassessAfterChange } from '../farms/reassess.ts';
 import { notFound } from '../http/problem.ts';
 import { signedIn, type Register } from '../http/route.ts';
 import type { BlockRow, FarmRow, SensitivePlaceRow, SprayerRow } from '../models/farms.ts';
+import { snapshot } from '../models/table.ts';
 import type { Parts } from '../parts.ts';
 import type { Services } from '../services.ts';
 
@@ -43,7 +44,7 @@ export function farmRoutes(register: Register, services: Services, parts: Pick<P
   register(farmEndpoints.readFarm, async ({ params: { farmId } }) => {
     const row = await models.farms.findByPk(farmId);
     if (!row) throw notFound();
-    return presentFarm(row.get({ plain: true }));
+    return presentFarm(snapshot<FarmRow>(row));
   });
 
   /** Changes the farm in one transaction; answers what it was and what it is. */
@@ -51,7 +52,7 @@ export function farmRoutes(register: Register, services: Services, parts: Pick<P
     return inTransaction(sequelize, async (transaction) => {
       const row = await models.farms.findOne({ where: { id: farmId }, lock: transaction.LOCK.UPDATE, transaction });
       if (!row) throw notFound();
-      const before: FarmRow = row.get({ plain: true });
+      const before = snapshot<FarmRow>(row);
       if (version !== undefined && version !== before.version) throw await changedMeanwhile(services, before, presentFarm(before), input, transaction);
       const after: FarmRow = { ...before, ...input, version: before.version + 1, updatedAt: clock.now(), updatedBy: userId };
       after.timeZone = timeZoneAt(after);

@@ -21,6 +21,12 @@ function hashOf(root) {
   return hash.digest('hex');
 }
 
+function sentence(output, root) {
+  if (saysDiskFull(output)) return 'The disk is full: the client could not be built; make room and start again.';
+  if (/EACCES|EPERM|EROFS/.test(output)) return `No right to build the client in ${root}: start once as the user who owns that folder.`;
+  return `The client could not be built:\n${output.trim()}`;
+}
+
 /** Builds the client into dist/ when its sources changed since the last build; whether it did. */
 export async function ensureClient(root, stop) {
   const stamp = join(root, 'dist', '.sources');
@@ -33,7 +39,7 @@ export async function ensureClient(root, stop) {
     // Whatever mode the caller is in, people get React's production build.
     const env = { ...process.env, NODE_ENV: 'production' };
     const { status, output } = await runProgram(process.execPath, [join(root, 'node_modules/vite/bin/vite.js'), 'build', '--logLevel', 'warn'], { cwd: root, env, stop });
-    if (status !== 0) throw new SetupError(saysDiskFull(output) ? 'The disk is full: the client could not be built; make room and start again.' : `The client could not be built:\n${output.trim()}`);
+    if (status !== 0) throw new SetupError(sentence(output, root));
     try {
       writeFileSync(stamp, wanted);
     } catch (error) {

@@ -43,9 +43,12 @@ export const editedFrom = z.object({ version: z.number().int().optional() });
 
 export const listQuery = z.object({ archived: z.enum(['no', 'yes', 'all']).default('no') });
 
-/** A polygon as GeoJSON positions `[longitude, latitude]`, degrees, ring closed (RFC 7946). */
-export const polygonSchema = z.object({
-  type: z.literal('Polygon'),
-  coordinates: z.array(z.array(z.tuple([z.number().min(-180).max(180), z.number().min(-90).max(90)])).min(4).max(500)).min(1).max(10),
-});
+/** Positions `[longitude, latitude]`, degrees, the last the same as the first. */
+const ringSchema = z
+  .array(z.tuple([z.number().min(-180).max(180), z.number().min(-90).max(90)]))
+  .min(4, 'must have at least three corners')
+  .max(500, 'must have at most 499 corners')
+  .refine((ring) => ring[0]?.[0] === ring.at(-1)?.[0] && ring[0]?.[1] === ring.at(-1)?.[1], 'must end where it begins');
+/** A polygon of GeoJSON (RFC 7946). */
+export const polygonSchema = z.object({ type: z.literal('Polygon'), coordinates: z.array(ringSchema).min(1).max(10) });
 export type Polygon = z.infer<typeof polygonSchema>;

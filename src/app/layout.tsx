@@ -4,7 +4,9 @@ import { Outlet, useLocation } from 'react-router-dom';
 import { AppFrame, type FrameLink } from '../components/index.ts';
 import { paths } from '../lib/paths.ts';
 import { demoStatusQuery } from '../lib/session/get-demo-status.ts';
-import { useFarm } from '../lib/session/session.ts';
+import { meQuery } from '../lib/session/get-me.ts';
+import { lastFarmOf } from '../lib/session/last-farm.ts';
+import { MeContext, useFarm } from '../lib/session/session.ts';
 import { PageBoundary, PageSkeleton } from './states.tsx';
 
 const DemoBar = lazy(() => import('../features/demo/components/demo-bar.tsx').then(({ DemoBar: component }) => ({ default: component })));
@@ -36,30 +38,35 @@ function Frame({ links, place, children }: { links: FrameLink[]; place?: string;
   );
 }
 
+const linksOf = (farmId: string): FrameLink[] => [
+  { to: paths.daybreak(farmId), name: 'Daybreak', end: true },
+  { to: paths.plans.list(farmId), name: 'Plans' },
+  { to: paths.shelf.list(farmId), name: 'Shelf' },
+  { to: paths.settings(farmId), name: 'Farm' },
+  { to: paths.notices(farmId), name: 'Notices' },
+  { to: paths.people(farmId), name: 'People' },
+  { to: paths.account(), name: 'You' },
+];
+
 /** Pages of a farm. */
 export function FarmLayout() {
   const { id, name } = useFarm();
-  const links: FrameLink[] = [
-    { to: paths.daybreak(id), name: 'Daybreak', end: true },
-    { to: paths.plans.list(id), name: 'Plans' },
-    { to: paths.shelf.list(id), name: 'Shelf' },
-    { to: paths.settings(id), name: 'Farm' },
-    { to: paths.notices(id), name: 'Notices' },
-    { to: paths.people(id), name: 'People' },
-    { to: paths.account(), name: 'You' },
-  ];
   return (
-    <Frame links={links} place={name}>
+    <Frame links={linksOf(id)} place={name}>
       <Outlet />
     </Frame>
   );
 }
 
-/** Pages of no farm: signing in, one's account, the demo. */
+/** Pages of no farm: signing in, one's account, the demo. Whoever is signed in keeps the way back to the farm last looked at. */
 export function PlainLayout() {
+  const { data: me = null } = useQuery(meQuery);
+  const farm = me && lastFarmOf(me);
   return (
-    <Frame links={[]}>
-      <Outlet />
-    </Frame>
+    <MeContext value={me}>
+      <Frame links={farm ? linksOf(farm.id) : []} {...(farm ? { place: farm.name } : {})}>
+        <Outlet />
+      </Frame>
+    </MeContext>
   );
 }

@@ -1,147 +1,184 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { createTestApp, type TestApp } from '../support/app.ts';
-import { buildFarm, buildUser, password, signInAs } from '../support/people.ts';
+import { add, ownedFarm, pathsOf, typed } from '../support/farm.ts';
+import { buildUser, join, password, signInAs } from '../support/people.ts';
 
 let app: TestApp;
+/** What was assessed, newest last, and whether assessing fails. */
+const assessed: { farmId: string; fetch: string }[] = [];
+let assessingFails = false;
+
 beforeAll(async () => {
-  app = await createTestApp({ settings: { demo: true } });
+  app = await createTestApp({
+    settings: { demo: true },
+    parts: (_services, resting) => ({
+      assessor: {
+        ...resting.assessor,
+        assessFarm: async (farmId, options) => {
+          assessed.push({ farmId, fetch: options.fetch });
+          if (assessingFails) throw new Error('the weather is on strike');
+          return resting.assessor.assessFarm(farmId, options);
+        },
+      },
+    }),
+  });
 });
 afterAll(() => app.close());
 
-const farm = { name: 'Larch End', latitude: 44.7, longitude: -85.3, elevationM: 260 };
-const block = { name: 'North rows', crop: 'Apple', areaHa: 0.3 };
-const sprayer = { name: 'Pack', tankL: 10, minutesPerTank: 6, changeOverMinutes: 3 };
-const product = { name: 'Example One', rateMin: 2, rateMax: 4, rateUnit: 'flOzPerAcre' };
-
-async function owner() {
-  const farmId = await buildFarm(app);
-  return { farmId, browser: await signInAs(app, farmId, 'owner'), at: (path: string) => `/api/farms/${farmId}${path}` };
-}
-
-async function withPlanParts() {
-  const { farmId, browser, at } = await owner();
-  const made = async (noun: string, body: object) => (await browser.post(at(noun)).send(body).expect(201)).body.id as string;
-  const ids = { block: await made('/blocks', block), sprayer: await made('/sprayers', sprayer), product: await made('/products', product) };
-  const plan = { name: 'First cover', blockIds: [ids.block], products: [{ productId: ids.product, rate: 3 }], sprayerId: ids.sprayer, carrierLHa: 100, firstDate: '2026-06-10', lastDate: '2026-06-14' };
-  return { farmId, browser, at, ids, plan };
+async function newcomer() {
+  const user = await buildUser(app);
+  const browser = app.browser();
+  await browser.post('/api/account/sign-in').send({ email: user.email, password }).expect(200);
+  return browser;
 }
 
 describe('opening a farm', () => {
   it('makes its opener owner, and finds the time zone from the position', async () => {
-    const user = await buildUser(app);
-    const browser = app.browser();
-    await browser.post('/api/account/sign-in').send({ email: user.email, password });
-    const opened = await browser.post('/api/farms').send(farm).expect(201);
-    expect(opened.body).toMatchObject({ ...farm, timeZone: 'America/Detroit', eveTime: '20:00', dawnLeadMinutes: 30 });
+    const browser = await newcomer();
+    const opened = await browser.post('/api/farms').send(typed.farm).expect(201);
+    expect(opened.body).toMatchObject({ ...typed.farm, timeZone: 'America/Detroit', eveTime: '20:00', dawnLeadMinutes: 30 });
     expect((await browser.get('/api/account')).body.farms).toMatchObject([{ id: opened.body.id, role: 'owner' }]);
   });
 
-  it('names a position that is nowhere', async () => {
-    const { browser } = await owner();
-    const answer = await browser.post('/api/farms').send({ ...farm, latitude: 91, eveTime: '25:00' }).expect(422);
+  it.each([
+    ['Oregon', 44.05, -123.1, 'America/Los_Angeles'],
+    ['Arizona, which keeps standard time', 33.4, -112.1, 'America/Phoenix'],
+    ['Kent', 51.2, 0.6, 'Europe/London'],
+    ['Tasmania', -42.9, 147.2, 'Australia/Hobart'],
+  ])('in %s finds its zone', async (_where, latitude, longitude, timeZone) => {
+    const opened = await (await newcomer()).post('/api/farms').send({ ...typed.farm, latitude, longitude }).expect(201);
+    expect(opened.body.timeZone).toBe(timeZone);
+  });
+
+  it('names every entry that needs another look, with the remedy', async () => {
+    const answer = await (await newcomer()).post('/api/farms').send({ ...typed.farm, latitude: 91, elevationM: 'high', eveTime: '25:00' }).expect(422);
     expect(answer.body.problems).toEqual([
       { path: 'latitude', message: 'must be at most 90' },
+      { path: 'elevationM', message: 'must be a number, such as 12.5' },
       { path: 'eveTime', message: 'must be a time such as 20:00' },
     ]);
   });
+
+  it('several times gives a person several farms', async () => {
+    const browser = await newcomer();
+    for (const name of ['One', 'Two']) await browser.post('/api/farms').send({ ...typed.farm, name }).expect(201);
+    expect((await browser.get('/api/account')).body.farms.map((farm: { name: string }) => farm.name).sort()).toEqual(['One', 'Two']);
+  });
 });
 
-describe('what a farm keeps', () => {
+describe('a farm', () => {
+  it('that moves over a zone border keeps time by its new place, and gets the weather of it', async () => {
+    const { browser, at, farmId } = await ownedFarm(app);
+    const { body: before } = await browser.get(at(''));
+    const moved = await browser.put(at('')).send({ ...typed.farm, latitude: 45.5, longitude: -122.7, version: before.version }).expect(200);
+    expect(moved.body.timeZone).toBe('America/Los_Angeles');
+    expect(assessed.at(-1)).toEqual({ farmId, fetch: 'now' });
+  });
+
+  it('tells in the trail who moved the times of its notices', async () => {
+    const { browser, at } = await ownedFarm(app);
+    const { body: farm } = await browser.get(at(''));
+    await browser.put(at('')).send({ ...farm, eveTime: '21:30', dawnLeadMinutes: 45 }).expect(200);
+    const [entry] = (await browser.get(at('/audit')).expect(200)).body.items;
+    expect(entry).toMatchObject({ what: 'farm changed', details: { eveTime: { before: '20:00', after: '21:30' }, dawnLeadMinutes: { before: 30, after: 45 } } });
+  });
+
+  it('that is archived leaves the list of farms, and comes back', async () => {
+    const { browser, at, farmId } = await ownedFarm(app);
+    await browser.patch(at('/archived')).send({ archived: true }).expect(200);
+    expect((await browser.get('/api/account')).body.farms).toEqual([]);
+    await browser.patch(at('/archived')).send({ archived: false }).expect(200);
+    expect((await browser.get('/api/account')).body.farms).toMatchObject([{ id: farmId }]);
+  });
+});
+
+describe.each([
+  ['/blocks', typed.block, { trees: 120 }],
+  ['/sensitive-places', typed.place, { distanceM: 90 }],
+  ['/sprayers', typed.sprayer, { tankL: 12 }],
+  ['/products', typed.product, { rainFreeHours: 4 }],
+])('what a farm keeps under %s', (noun, body, change) => {
   it('can be added, read, changed, archived and brought back', async () => {
-    const { browser, at } = await owner();
-    const { body: added } = await browser.post(at('/blocks')).send(block).expect(201);
-    expect(added).toMatchObject({ ...block, version: 1, archivedAt: null });
-    await browser.put(at(`/blocks/${added.id}`)).send({ ...block, trees: 120 }).expect(200);
-    expect((await browser.get(at(`/blocks/${added.id}`))).body).toMatchObject({ trees: 120, version: 2 });
-    await browser.patch(at(`/blocks/${added.id}/archived`)).send({ archived: true }).expect(200);
-    expect((await browser.get(at('/blocks'))).body.items).toEqual([]);
-    expect((await browser.get(at('/blocks?archived=yes'))).body.items).toHaveLength(1);
-    await browser.patch(at(`/blocks/${added.id}/archived`)).send({ archived: false }).expect(200);
-    expect((await browser.get(at('/blocks'))).body.items).toHaveLength(1);
+    const { browser, at } = await ownedFarm(app);
+    const { body: added } = await browser.post(at(noun)).send(body).expect(201);
+    expect(added).toMatchObject({ ...body, version: 1, archivedAt: null });
+    await browser.put(at(`${noun}/${added.id}`)).send({ ...body, ...change }).expect(200);
+    expect((await browser.get(at(`${noun}/${added.id}`))).body).toMatchObject({ ...change, version: 2 });
+    const archived = await browser.patch(at(`${noun}/${added.id}/archived`)).send({ archived: true }).expect(200);
+    expect(archived.body.archivedAt).not.toBeNull();
+    expect((await browser.get(at(noun))).body.items).toEqual([]);
+    expect((await browser.get(at(`${noun}?archived=yes`))).body.items).toHaveLength(1);
+    expect((await browser.get(at(`${noun}?archived=all`))).body.items).toHaveLength(1);
+    await browser.patch(at(`${noun}/${added.id}/archived`)).send({ archived: false }).expect(200);
+    expect((await browser.get(at(noun))).body.items).toHaveLength(1);
+    expect((await browser.get(at(`${noun}?archived=yes`))).body.items).toEqual([]);
   });
 
-  it('tells two people who edit one thing of each other, and loses neither version', async () => {
-    const { browser, at } = await owner();
-    const { body: added } = await browser.post(at('/blocks')).send(block).expect(201);
-    await browser.put(at(`/blocks/${added.id}`)).send({ ...block, name: 'Hers', version: 1 }).expect(200);
-    const conflict = await browser.put(at(`/blocks/${added.id}`)).send({ ...block, name: 'His', version: 1 }).expect(409);
-    expect(conflict.body).toMatchObject({ theirs: { name: 'Hers', version: 2 }, yours: { name: 'His' } });
+  it('is not to be found, changed or archived from another farm', async () => {
+    const id = await add(await ownedFarm(app), noun, body);
+    const other = await ownedFarm(app);
+    await other.browser.get(other.at(`${noun}/${id}`)).expect(404);
+    await other.browser.put(other.at(`${noun}/${id}`)).send(body).expect(404);
+    await other.browser.patch(other.at(`${noun}/${id}/archived`)).send({ archived: true }).expect(404);
   });
 
-  it('keeps a drawn block as GeoJSON', async () => {
-    const { browser, at } = await owner();
-    const polygon = { type: 'Polygon', coordinates: [[[-85.3, 44.7], [-85.299, 44.7], [-85.299, 44.701], [-85.3, 44.7]]] };
-    const { body } = await browser.post(at('/blocks')).send({ ...block, polygon }).expect(201);
-    expect((await browser.get(at(`/blocks/${body.id}`))).body.polygon).toEqual(polygon);
-  });
-
-  it('is not to be found from another farm', async () => {
-    const one = await owner();
-    const two = await owner();
-    const { body } = await one.browser.post(one.at('/blocks')).send(block).expect(201);
-    await two.browser.get(two.at(`/blocks/${body.id}`)).expect(404);
-    await two.browser.put(two.at(`/blocks/${body.id}`)).send(block).expect(404);
+  it('is judged anew at once, from the forecast at hand', async () => {
+    const farm = await ownedFarm(app);
+    await add(farm, noun, body);
+    expect(assessed.at(-1)).toEqual({ farmId: farm.farmId, fetch: 'never' });
   });
 });
 
-describe('a product', () => {
-  it('is refused when its figures contradict each other, each by its field', async () => {
-    const { browser, at } = await owner();
-    const answer = await browser.post(at('/products')).send({ ...product, rateMax: 1, windMinMs: 5, windMaxMs: 2 }).expect(422);
-    expect(answer.body.problems.map((problem: { path: string }) => problem.path)).toEqual(['rateMax', 'windMaxMs']);
+describe('a change', () => {
+  it('made by two people at one time tells the second of the first by name, and loses neither version', async () => {
+    const farm = await ownedFarm(app);
+    const { browser, at } = farm;
+    const id = await add(farm, '/blocks', typed.block);
+    const other = await signInAs(app, farm.farmId, 'applicator');
+    const { name } = (await other.get('/api/account')).body;
+    await other.put(at(`/blocks/${id}`)).send({ ...typed.block, name: 'Theirs', version: 1 }).expect(200);
+    const conflict = await browser.put(at(`/blocks/${id}`)).send({ ...typed.block, name: 'Mine', version: 1 }).expect(409);
+    expect(conflict.body).toMatchObject({ theirs: { name: 'Theirs', version: 2 }, yours: { name: 'Mine' }, changedBy: name, changedAt: app.clock.now().toISOString() });
+    expect(conflict.body.detail).toContain(name);
+    expect((await browser.get(at(`/blocks/${id}`))).body.name).toBe('Theirs');
   });
 
-  it('keeps its label as uploaded, and hands it out as a file', async () => {
-    const { browser, at } = await owner();
-    const { body } = await browser.post(at('/products')).send(product).expect(201);
-    const pdf = Buffer.from('%PDF-1.4\n1 0 obj\nendobj\n%%EOF\n');
-    const kept = await browser.post(at(`/products/${body.id}/label`)).attach('file', pdf, 'my label.pdf').expect(200);
-    expect(kept.body.labelFile).toMatchObject({ name: 'my label.pdf', bytes: pdf.length });
-    const read = await browser.get(at(`/products/${body.id}/label`)).buffer().parse((response, done) => {
-      const chunks: Buffer[] = [];
-      response.on('data', (chunk: Buffer) => chunks.push(chunk)).on('end', () => done(null, Buffer.concat(chunks)));
-    });
-    expect(read.body.equals(pdf)).toBe(true);
-    expect(read.headers['content-disposition']).toMatch(/attachment/);
-    expect(read.headers['x-content-type-options']).toBe('nosniff');
+  it('is stored even when the farm cannot be judged after it', async () => {
+    const farm = await ownedFarm(app);
+    assessingFails = true;
+    try {
+      const id = await add(farm, '/blocks', typed.block);
+      await farm.browser.get(farm.at(`/blocks/${id}`)).expect(200);
+    } finally {
+      assessingFails = false;
+    }
   });
 
-  it('refuses a label that is no PDF whatever it calls itself', async () => {
-    const { browser, at } = await owner();
-    const { body } = await browser.post(at('/products')).send(product).expect(201);
-    const answer = await browser.post(at(`/products/${body.id}/label`)).attach('file', Buffer.from('<html>'), { filename: 'label.pdf', contentType: 'application/pdf' }).expect(415);
-    expect(answer.body.problems).toEqual([{ path: 'file', message: 'is not a PDF file' }]);
+  it('keeps a drawn block as GeoJSON, and refuses an open ring', async () => {
+    const { browser, at } = await ownedFarm(app);
+    const ring = [[-85.3, 44.7], [-85.299, 44.7], [-85.299, 44.701], [-85.3, 44.7]];
+    const { body } = await browser.post(at('/blocks')).send({ ...typed.block, polygon: { type: 'Polygon', coordinates: [ring] } }).expect(201);
+    expect((await browser.get(at(`/blocks/${body.id}`))).body.polygon).toEqual({ type: 'Polygon', coordinates: [ring] });
+    const open = await browser.post(at('/blocks')).send({ ...typed.block, polygon: { type: 'Polygon', coordinates: [[...ring.slice(0, 3), [-85.3, 44.71]]] } }).expect(422);
+    expect(pathsOf(open)).toEqual(['polygon.coordinates.0']);
   });
 
-  it('leaves a trace when a figure of its label is changed', async () => {
-    const { browser, at } = await owner();
-    const { body } = await browser.post(at('/products')).send(product).expect(201);
-    await browser.put(at(`/products/${body.id}`)).send({ ...product, windMaxMs: 4 }).expect(200);
-    const { items } = (await browser.get(at('/audit'))).body;
-    expect(items.find((entry: { what: string }) => entry.what === 'product changed')).toMatchObject({ subject: product.name, details: { windMaxMs: { before: null, after: 4 } } });
-  });
-});
-
-describe('a plan', () => {
-  it('knows its area, tanks and minutes', async () => {
-    const { browser, at, plan } = await withPlanParts();
-    const { body } = await browser.post(at('/plans')).send(plan).expect(201);
-    expect(body).toMatchObject({ areaHa: 0.3, minutesNeeded: 3 * 6 + 2 * 3 });
-    expect(body.tanks).toBeCloseTo(3, 9);
-    expect((await browser.get(at(`/plans/${body.id}`))).body).toMatchObject({ blockIds: plan.blockIds, products: plan.products, firstDate: '2026-06-10' });
+  it('in another form than JSON, or in broken JSON, is refused by its kind', async () => {
+    const { browser, at } = await ownedFarm(app);
+    expect((await browser.post(at('/blocks')).type('form').send('name=x')).status).toBe(415);
+    expect((await browser.post(at('/blocks')).type('json').send('{"name":')).status).toBe(400);
   });
 
-  it('names no block of another farm and no archived sprayer', async () => {
-    const { browser, at, ids, plan } = await withPlanParts();
-    const other = await withPlanParts();
-    await browser.patch(at(`/sprayers/${ids.sprayer}/archived`)).send({ archived: true }).expect(200);
-    const answer = await browser.post(at('/plans')).send({ ...plan, blockIds: [other.ids.block] }).expect(422);
-    expect(answer.body.problems.map((problem: { path: string }) => problem.path)).toEqual(['blockIds.0', 'sprayerId']);
-  });
-
-  it('does not end before it begins', async () => {
-    const { browser, at, plan } = await withPlanParts();
-    const answer = await browser.post(at('/plans')).send({ ...plan, lastDate: '2026-06-09' }).expect(422);
-    expect(answer.body.problems).toEqual([{ path: 'lastDate', message: 'must not be before the first date' }]);
+  it('by someone who left the farm is told as by a person no longer named', async () => {
+    const farm = await ownedFarm(app);
+    const user = await buildUser(app);
+    await join(app, farm.farmId, user.id, 'applicator');
+    const id = await add(farm, '/blocks', typed.block);
+    const leaving = app.browser();
+    await leaving.post('/api/account/sign-in').send({ email: user.email, password }).expect(200);
+    await leaving.put(farm.at(`/blocks/${id}`)).send({ ...typed.block, name: 'Last act' }).expect(200);
+    await app.services.models.users.destroy({ where: { id: user.id } });
+    const conflict = await farm.browser.put(farm.at(`/blocks/${id}`)).send({ ...typed.block, version: 1 }).expect(409);
+    expect(conflict.body.changedBy).toBeNull();
   });
 });

@@ -97,7 +97,12 @@ export function useTypedForm<Body extends object>({ schema, more, numbers, store
     return { registration: emptyIsNull ? form.register(name, { setValueAs: (value: unknown) => (value === '' ? null : value) as never }) : form.register(name), problem: form.getFieldState(name, form.formState).error?.message, unit: quantity ? unitsOf[quantity][units].name : '', numeric: quantity !== undefined };
   }
 
-  return { form, submit, bind, formProblem, units, busy: form.formState.isSubmitting };
+  /** Fills fields in for the person, as if typed. */
+  function fill(values: Record<string, string>): void {
+    for (const [name, value] of Object.entries(values)) form.setValue(name as Path<Values>, value as never, { shouldValidate: true, shouldDirty: true });
+  }
+
+  return { form, submit, bind, fill, formProblem, units, busy: form.formState.isSubmitting };
 }
 
 export type TypedForm<Body extends object> = ReturnType<typeof useTypedForm<Body>>;

@@ -1,7 +1,9 @@
+import type { Me } from '../../../shared/api/accounts.ts';
+
 const storageKey = 'dawnvane.lastFarm';
 
 /** The farm last looked at in this browser; storage may be shut off. */
-export function readLastFarm(): string | null {
+function readLastFarm(): string | null {
   try {
     return localStorage.getItem(storageKey);
   } catch {
@@ -15,4 +17,10 @@ export function rememberFarm(farmId: string): void {
   } catch {
     // Without storage the first farm is taken.
   }
+}
+
+/** The farm last looked at, if one still belongs to it; else the first. */
+export function lastFarmOf({ farms }: Me): Me['farms'][number] | undefined {
+  const last = readLastFarm();
+  return farms.find(({ id }) => id === last) ?? farms[0];
 }

@@ -20,7 +20,7 @@ export function MailReader({ mail }: { mail: z.infer<typeof demoMailSchema> }) {
       </div>
       {as === 'html' ? (
         // No script runs in it, and a link opens outside of it.
-        <iframe title={`Letter: ${mail.subject}`} sandbox="allow-popups allow-popups-to-escape-sandbox" srcDoc={mail.html.replace(/<head>/i, '<head><base target="_blank">')} className="h-[60dvh] w-full rounded-lg border border-ink/15 bg-white" />
+        <iframe title={`Letter: ${mail.subject}`} sandbox="allow-popups allow-popups-to-escape-sandbox" srcDoc={mail.html.replace(/<a /gi, '<a target="_blank" ')} className="h-[60dvh] w-full rounded-lg border border-ink/15 bg-white" />
       ) : (
         <pre className="rounded-lg border border-ink/15 bg-paper-raised p-4 font-sans whitespace-pre-wrap">{mail.text}</pre>
       )}

@@ -1,17 +1,17 @@
 import type { z } from 'zod';
 import { farmBody, type Farm } from '../../../../shared/api/farms.ts';
+import { UseMyPlace } from '../../../components/use-my-place.tsx';
 import { ChoiceField, Fields, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
 import { choices } from '../../../lib/forms/choices.ts';
 import type { FormPart } from '../../../lib/forms/form-part.ts';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { exposureWords } from '../words.ts';
-import { UseMyPlace } from './use-my-place.tsx';
 
 type Body = z.infer<typeof farmBody>;
-export const farmNumbers = { latitude: 'plain', longitude: 'plain', elevationM: 'height', dawnLeadMinutes: 'plain' } as const;
+const numbers = { latitude: 'plain', longitude: 'plain', elevationM: 'height', dawnLeadMinutes: 'plain' } as const;
 
 export function FarmForm({ stored, save, cancelTo }: FormPart<Farm, Body> & { stored: Farm }) {
-  const form = useTypedForm<Body>({ schema: farmBody, numbers: farmNumbers, stored, save });
+  const form = useTypedForm<Body>({ schema: farmBody, numbers, stored, save });
   return (
     <RecordForm form={form} cancelTo={cancelTo} saveLabel="Save the farm">
       <Fields legend="Where it is" hint="The forecast, the sun and the time zone follow from the position.">
@@ -19,12 +19,7 @@ export function FarmForm({ stored, save, cancelTo }: FormPart<Farm, Body> & { st
         <NumberField {...form.bind('latitude')} label="Latitude" unit="°" hint="North is above 0." required />
         <NumberField {...form.bind('longitude')} label="Longitude" unit="°" hint="West is below 0, with a minus sign." required />
         <NumberField {...form.bind('elevationM')} label="Elevation" required />
-        <UseMyPlace
-          take={(latitude, longitude) => {
-            form.form.setValue('latitude', latitude, { shouldValidate: true, shouldDirty: true });
-            form.form.setValue('longitude', longitude, { shouldValidate: true, shouldDirty: true });
-          }}
-        />
+        <UseMyPlace take={form.fill} />
         <ChoiceField {...form.bind('exposure')} label="How it lies" hint="Valley floors hold cold, still air longer." choices={choices(exposureWords)} />
       </Fields>
       <Fields legend="When to tell you">

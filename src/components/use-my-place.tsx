@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { Button } from '../../../components/index.ts';
+import { Button } from './button.tsx';
 
 type State = { kind: 'idle' } | { kind: 'asking' } | { kind: 'failed'; because: string };
 
@@ -13,7 +13,7 @@ const timeoutMs = 20_000;
 const digits = 5;
 
 /** Fills a position in from the device. */
-export function UseMyPlace({ take }: { take: (latitude: string, longitude: string) => void }) {
+export function UseMyPlace({ take }: { take: (position: { latitude: string; longitude: string }) => void }) {
   const [state, setState] = useState<State>({ kind: 'idle' });
   if (!('geolocation' in navigator)) return null;
 
@@ -21,7 +21,7 @@ export function UseMyPlace({ take }: { take: (latitude: string, longitude: strin
     setState({ kind: 'asking' });
     navigator.geolocation.getCurrentPosition(
       ({ coords }) => {
-        take(coords.latitude.toFixed(digits), coords.longitude.toFixed(digits));
+        take({ latitude: coords.latitude.toFixed(digits), longitude: coords.longitude.toFixed(digits) });
         setState({ kind: 'idle' });
       },
       (error) => setState({ kind: 'failed', because: because[error.code] ?? because[2]! }),
