@@ -43,10 +43,15 @@ async function database(config: Config, launch: Launch, undo: Undo, onLoss: (why
   return sequelize;
 }
 
-function settingsOf(config: Config, launch: Launch, port: number): AppSettings {
-  const host = config.host === '0.0.0.0' || config.host === '::' ? 'localhost' : config.host;
+/** The address at which this machine itself reaches the server. */
+function localAddress(host: string, port: number): string {
+  if (host === '0.0.0.0' || host === '::') return `http://localhost:${port}`;
+  return `http://${host.includes(':') ? `[${host}]` : host}:${port}`;
+}
+
+function settingsOf(config: Config, launch: Launch, local: string): AppSettings {
   return {
-    publicUrl: config.publicUrl ?? `http://${host.includes(':') ? `[${host}]` : host}:${port}`,
+    publicUrl: config.publicUrl ?? local,
     production: config.mode === 'production',
     demo: config.mode === 'demo',
     version: (JSON.parse(readFileSync(join(launch.root, 'package.json'), 'utf8')) as { version: string }).version,
@@ -84,16 +89,20 @@ export async function serve(launch: Launch): Promise<void> {
     if (web) undo.push(() => web.close());
     const sequelize = await both(database(config, launch, undo, lose), web ? launch.ensureClient() : Promise.resolve());
     stop.throwIfAborted();
-    const settings = settingsOf(config, launch, web?.port ?? config.port);
+    const local = localAddress(config.host, web?.port ?? config.port);
+    const settings = settingsOf(config, launch, local);
     const log = pino({ level: config.logLevel, base: null });
+    const hint = (): void => say('Ending as soon as the parts are up; once more ends at once.');
+    stop.addEventListener('abort', hint);
     const parts = await runParts({ settings, clock: systemClock, log, sequelize, models: createModels(sequelize), random: Math.random }, config);
+    stop.removeEventListener('abort', hint);
     undo.push(() => parts.stop());
     if (web) {
       web.serve(parts.app);
       undo.push(() => web.close());
     }
     stop.throwIfAborted();
-    say(web ? `Dawnvane is ready at ${settings.publicUrl}` : `Dawnvane is ready (${config.roles.join(', ')})`);
+    say(web ? `Dawnvane is ready at ${settings.publicUrl}${settings.publicUrl === local ? '' : ` (listening on ${local})`}` : `Dawnvane is ready (${config.roles.join(', ')})`);
     if (parts.welcome) say(parts.welcome);
     await Promise.race([stopped, lost]);
   } finally {

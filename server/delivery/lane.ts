@@ -59,7 +59,7 @@ export class Lane {
   }
 
   async #send(delivery: ClaimedDelivery, attempt: (delivery: ClaimedDelivery) => Promise<Outcome>): Promise<void> {
-    const outcome = await attempt(delivery).catch((error: unknown): Outcome => {
+    const outcome = await inTime(attempt(delivery)).catch((error: unknown): Outcome => {
       this.#services.log.error({ err: error, deliveryId: delivery.id }, 'a channel failed in a way it does not know');
       return { kind: 'retry', status: null, detail: clipped(error instanceof Error ? error.message : 'Unknown failure.'), retryAfterSeconds: null };
     });
@@ -75,5 +75,20 @@ export class Lane {
   async allDone(): Promise<void> {
     await this.#claiming;
     await Promise.all(this.#underWay.values());
+  }
+}
+
+/** Longer than every channel's own time-outs: a call that hangs for ever must not keep its claim for ever. */
+const hangMs = 120_000;
+
+async function inTime(attempt: Promise<Outcome>): Promise<Outcome> {
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  const hung = new Promise<Outcome>((resolve) => {
+    timer = setTimeout(() => resolve({ kind: 'retry', status: null, detail: 'The call hung and was given up.', retryAfterSeconds: null }), hangMs);
+  });
+  try {
+    return await Promise.race([attempt, hung]);
+  } finally {
+    clearTimeout(timer);
   }
 }

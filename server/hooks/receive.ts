@@ -1,4 +1,5 @@
 import { inboundForecastSchema } from '../../shared/api/inbound-forecast.ts';
+import { plainMessages } from '../../shared/api/messages.ts';
 import { execute } from '../database/connection.ts';
 import { unsealWebhookSecret } from '../delivery/webhook/secrets.ts';
 import { HttpProblem, invalid, problemsOf } from '../http/problem.ts';
@@ -31,7 +32,7 @@ export async function receiveForecast({ models, sequelize, settings, clock }: Se
   );
   // A source that does not exist answers like a wrong signature: ids reveal nothing.
   if ('refused' in signed) throw new HttpProblem(401, signed.refused);
-  const message = inboundForecastSchema.safeParse(parsed(body));
+  const message = inboundForecastSchema.safeParse(parsed(body), { error: plainMessages });
   if (!message.success) throw invalid(problemsOf(message.error));
   const added = await execute(
     sequelize,

@@ -2,81 +2,100 @@ import { z } from 'zod';
 import { problemSchema } from '../../shared/api/common.ts';
 import type { Endpoint } from '../../shared/api/endpoint.ts';
 import { allEndpoints } from '../../shared/api/index.ts';
+import { inboundForecastSchema } from '../../shared/api/inbound-forecast.ts';
+import { noticeEventSchema } from '../../shared/api/notice-event.ts';
+import { SchemaBook, type Json } from './openapi-schemas.ts';
 
-type Json = Record<string, unknown>;
+const takesNothing = (schema: z.ZodType): boolean => schema instanceof z.ZodUndefined || (schema instanceof z.ZodObject && Object.keys(schema.shape).length === 0);
 
-/** JSON Schema of what is read (`input`: before defaults) or sent (`output`). */
-const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Json => {
-  const { $schema: _dialect, ...rest } = z.toJSONSchema(schema, { io, unrepresentable: 'any' }) as Json;
-  return rest;
-};
+/** Headers of a signed message, as Standard Webhooks 1.0.0 names them. */
+const signatureHeaders: Json[] = [
+  ['webhook-id', 'Names the message; the same at every try.'],
+  ['webhook-timestamp', 'When this try was signed: whole seconds since 1970.'],
+  ['webhook-signature', 'One or more `v1,` signatures, apart by spaces.'],
+].map(([name, description]) => ({ name, in: 'header', required: true, description, schema: { type: 'string' } }));
 
-const isEmpty = (schema: z.ZodType): boolean => schema instanceof z.ZodUndefined || (schema instanceof z.ZodObject && Object.keys(schema.shape).length === 0);
-
-function parameters(endpoint: Endpoint): Json[] {
-  const rows = (schema: z.ZodType, place: 'path' | 'query'): Json[] => {
-    if (!(schema instanceof z.ZodObject)) return [];
-    return Object.entries(schema.shape as Record<string, z.ZodType>).map(([name, part]) => ({ name, in: place, required: place === 'path' || !part.safeParse(undefined).success, schema: schemaOf(part, 'input') }));
-  };
-  return [...rows(endpoint.params, 'path'), ...rows(endpoint.query, 'query')];
+function parameters({ params, query, access }: Endpoint, book: SchemaBook): Json[] {
+  const rows = (schema: z.ZodType, place: 'path' | 'query'): Json[] =>
+    schema instanceof z.ZodObject
+      ? Object.entries(schema.shape as Record<string, z.ZodType>).map(([name, part]) => ({ name, in: place, required: place === 'path' || !part.safeParse(undefined).success, schema: book.of(part, 'input') }))
+      : [];
+  return [...rows(params, 'path'), ...rows(query, 'query'), ...(access === 'signature' ? signatureHeaders : [])];
 }
 
-function requestBody(endpoint: Endpoint): Json | undefined {
-  if (endpoint.bodyKind === 'multipart') {
-    return { required: true, content: { 'multipart/form-data': { schema: { type: 'object', required: ['file'], properties: { file: { type: 'string', contentMediaType: 'application/octet-stream' } } } } } };
-  }
-  if (endpoint.bodyKind === 'raw') return { required: true, content: { 'application/json': { schema: { type: 'object' } } } };
-  return isEmpty(endpoint.body) ? undefined : { required: true, content: { 'application/json': { schema: schemaOf(endpoint.body, 'input') } } };
+function requestBody({ bodyKind, body, access }: Endpoint, book: SchemaBook): Json | null {
+  if (bodyKind === 'multipart') return { required: true, content: { 'multipart/form-data': { schema: { type: 'object', required: ['file'], properties: { file: { type: 'string', contentMediaType: 'application/octet-stream' } } } } } };
+  const schema = access === 'signature' ? inboundForecastSchema : body;
+  return takesNothing(schema) ? null : { required: true, content: { 'application/json': { schema: book.of(schema, 'input') } } };
 }
 
-const problem = (description: string): Json => ({ description, content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } } });
-
-/** How an endpoint may fail, from what it takes and who may call it. */
-function failures(endpoint: Endpoint): Json {
-  const { access } = endpoint;
-  const open = access === 'public' || access === 'demo' || access === 'signature';
+/** How an operation may fail, from what it takes and who may call it. */
+function failures(endpoint: Endpoint, book: SchemaBook): Json {
+  const { access, bodyKind, rateLimit, method } = endpoint;
+  const problem = (description: string): Json => ({ description, content: { 'application/problem+json': { schema: book.of(problemSchema, 'output') } } });
+  const needsSession = access === 'signedIn' || typeof access === 'object';
+  const takesBody = bodyKind !== undefined || !takesNothing(endpoint.body);
   return {
-    ...(open ? {} : { 401: problem('Nobody is signed in.') }),
-    ...(access === 'signature' ? { 401: problem('The signature does not hold.') } : {}),
-    ...(typeof access === 'object' ? { 403: problem('The role of the caller does not allow it.') } : {}),
+    ...(takesBody ? { 400: problem('The body is not understood.'), 413: problem('The body is too large.'), 415: problem('The body is of another kind than is read here.') } : {}),
+    ...(needsSession ? { 401: problem('Nobody is signed in.') } : {}),
+    ...(access === 'signature' ? { 401: problem('Sender, signature or date do not hold.') } : {}),
+    ...(typeof access === 'object' || method !== 'get' ? { 403: problem('The role of the caller does not allow it, or the request comes from another site.') } : {}),
     404: problem('Nothing of that name, or not for the caller.'),
+    ...(method === 'put' && typeof access === 'object' ? { 409: problem('Someone else changed it since: `theirs` and `yours` hold both versions, `changedBy` and `changedAt` who and when.') } : {}),
     422: problem('Entries need another look; each is named by its path.'),
-    ...(endpoint.rateLimit ? { 429: problem('Too many tries from one address.') } : {}),
+    ...(rateLimit ? { 429: problem('Too many tries; the header Retry-After tells how long to wait.') } : {}),
     default: problem('Anything else.'),
   };
 }
 
-function success(endpoint: Endpoint): Json {
-  if (endpoint.answerKind) return { description: 'Success.', content: { [endpoint.answerKind]: {} } };
-  return isEmpty(endpoint.answer) && endpoint.status !== 200 ? { description: 'Success; nothing to tell.' } : { description: 'Success.', content: { 'application/json': { schema: schemaOf(endpoint.answer, 'output') } } };
+function success({ answer, answerKind, status }: Endpoint, book: SchemaBook): Json {
+  if (answerKind) return { description: 'Success.', content: { [answerKind]: { schema: { type: 'string', contentMediaType: answerKind } } } };
+  return answer instanceof z.ZodUndefined || status === 204 ? { description: 'Success; nothing to tell.' } : { description: 'Success.', content: { 'application/json': { schema: book.of(answer, 'output') } } };
+}
+
+function operation(endpoint: Endpoint, book: SchemaBook): Json {
+  const { id, summary, access, rateLimit, status } = endpoint;
+  const body = requestBody(endpoint, book);
+  return {
+    operationId: id,
+    summary,
+    ...(typeof access === 'object' ? { tags: [access.resource], 'x-right': `${access.action} ${access.resource}` } : { tags: [access] }),
+    ...(rateLimit ? { 'x-rate-limited': rateLimit } : {}),
+    security: access === 'signedIn' || typeof access === 'object' ? [{ session: [] }] : [],
+    parameters: parameters(endpoint, book),
+    ...(body ? { requestBody: body } : {}),
+    responses: { [status]: success(endpoint, book), ...failures(endpoint, book) },
+  };
 }
 
 /** The whole API as OpenAPI 3.1, made from the same schemas that check the requests. */
-export function openApiDocument(version: string, webhooks: Json = {}): Json {
+export function openApiDocument(version: string): Json {
+  const book = new SchemaBook();
   const paths: Record<string, Json> = {};
   for (const endpoint of allEndpoints) {
     const path = endpoint.path.replace(/:(\w+)/g, '{$1}');
-    const body = requestBody(endpoint);
-    paths[path] = {
-      ...paths[path],
-      [endpoint.method]: {
-        operationId: endpoint.id,
-        summary: endpoint.summary,
-        ...(typeof endpoint.access === 'object' ? { 'x-right': `${endpoint.access.action} ${endpoint.access.resource}`, tags: [endpoint.access.resource] } : { tags: [endpoint.access] }),
-        security: endpoint.access === 'signedIn' || typeof endpoint.access === 'object' ? [{ session: [] }] : [],
-        parameters: parameters(endpoint),
-        ...(body ? { requestBody: body } : {}),
-        responses: { [endpoint.status]: success(endpoint), ...failures(endpoint) },
-      },
-    };
+    paths[path] = { ...paths[path], [endpoint.method]: operation(endpoint, book) };
   }
+  const event = {
+    operationId: 'noticeEvent',
+    summary: 'A notice of the farm, sent to its outgoing webhooks at least once; the same webhook-id is the same event.',
+    parameters: signatureHeaders,
+    requestBody: { required: true, content: { 'application/json': { schema: book.of(noticeEventSchema, 'output') } } },
+    responses: { '2XX': { description: 'Taken.' }, 410: { description: 'Send no more: the webhook is switched off.' }, default: { description: 'Tried again later.' } },
+  };
   return {
     openapi: '3.1.0',
-    info: { title: 'Dawnvane', version, description: 'Whether a morning is fit for spraying, and the notices about it. The label is the law; local rules and a licensed applicator come first; a reading on site beats any forecast.' },
+    info: {
+      title: 'Dawnvane',
+      version,
+      description:
+        'Whether a morning is fit for spraying, and the notices about it. The label is the law; local rules and a licensed applicator come first; a reading on site beats any forecast.\n\nWhatever changes something must carry an Origin header of the pages themselves, but for signed messages.',
+    },
+    servers: [{ url: '/' }],
     paths,
-    webhooks,
+    webhooks: { notice: { post: event } },
     components: {
-      schemas: { Problem: schemaOf(problemSchema, 'output') },
+      schemas: book.schemas,
       securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'dawnvane_session' } },
     },
   };

@@ -1,8 +1,8 @@
 import { z } from 'zod';
 import { beeKinds } from './case.ts';
+import { limitNames, type LimitName } from './limit-names.ts';
 
-export const limitNames = ['wind', 'gusts', 'stillAir', 'inversion', 'rainFree', 'wetFoliage', 'pollinators', 'temperature', 'deltaT', 'towardSensitivePlace'] as const;
-export type LimitName = (typeof limitNames)[number];
+export { limitNames, type LimitName };
 
 /** `hard`: label, law or the grower's own; it holds. `advice`: shown, does not hold. */
 export const limitKindSchema = z.enum(['hard', 'advice']);

@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { NavLink } from 'react-router-dom';
+import { NavLink, useLocation } from 'react-router-dom';
 import { LastWord } from './page.tsx';
 import { VerdictSign } from './verdict-sign.tsx';
 
@@ -20,8 +20,34 @@ interface AppFrameProps {
   children: ReactNode;
 }
 
+/** Pages in a phone's bar. */
+const inBar = 4;
+
 const linkLook = ({ isActive }: { isActive: boolean }): string =>
   `flex min-h-touch items-center justify-center px-2 text-center text-[0.95rem] md:justify-start md:rounded-lg md:px-3 ${isActive ? 'font-bold underline decoration-[3px] decoration-straw underline-offset-8' : 'text-ink-soft hover:text-ink'}`;
+
+const PageLink = ({ to, name, end }: FrameLink) => (
+  <NavLink to={to} end={end ?? false} className={linkLook}>
+    {name}
+  </NavLink>
+);
+
+/** Links that find no room in a phone's bar; it closes when one has arrived. */
+function MoreLinks({ links }: { links: FrameLink[] }) {
+  const { pathname } = useLocation();
+  return (
+    <details key={pathname} className="relative">
+      <summary className="flex min-h-touch list-none items-center px-2 text-[0.95rem] text-ink-soft">More</summary>
+      <ul className="absolute right-0 bottom-14 min-w-40 rounded-lg border border-ink/15 bg-paper-raised p-2 shadow-lg">
+        {links.map((link) => (
+          <li key={link.to}>
+            <PageLink {...link} />
+          </li>
+        ))}
+      </ul>
+    </details>
+  );
+}
 
 /** The frame of every page: links in a bar under the thumb on a phone, at the side on a wide screen. */
 export function AppFrame({ links, place, strip, children }: AppFrameProps) {
@@ -38,14 +64,17 @@ export function AppFrame({ links, place, strip, children }: AppFrameProps) {
               <VerdictSign state="go" size={32} silent />
               {place ?? 'Dawnvane'}
             </p>
-            <ul className="flex justify-around overflow-x-auto md:block">
-              {links.map(({ to, name, end }) => (
-                <li key={to}>
-                  <NavLink to={to} end={end ?? false} className={linkLook}>
-                    {name}
-                  </NavLink>
+            <ul className="flex justify-around md:block">
+              {links.map((link, index) => (
+                <li key={link.to} className={index >= inBar ? 'hidden md:block' : ''}>
+                  <PageLink {...link} />
                 </li>
               ))}
+              {links.length > inBar && (
+                <li className="md:hidden">
+                  <MoreLinks links={links.slice(inBar)} />
+                </li>
+              )}
             </ul>
           </nav>
         )}

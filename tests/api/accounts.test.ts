@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { createTestApp, type TestApp } from '../support/app.ts';
+import { createTestApp, statementsDuring, type TestApp } from '../support/app.ts';
 import { buildFarm, buildUser, lettersTo, password, signInAs, tokenIn } from '../support/people.ts';
 
 let app: TestApp;
@@ -114,14 +114,7 @@ describe('signing in', () => {
   it('is told apart, with the rights at every farm, by one question to the database', async () => {
     const farmId = await buildFarm(app);
     const browser = await signInAs(app, farmId, 'observer');
-    const { options } = app.services.sequelize;
-    const asked: string[] = [];
-    options.logging = (sql) => void asked.push(sql);
-    try {
-      await browser.get(`/api/farms/${farmId}/daybreak`).expect(200);
-    } finally {
-      options.logging = false;
-    }
+    const asked = await statementsDuring(app, async () => void (await browser.get(`/api/farms/${farmId}/daybreak`).expect(200)));
     // The resting assessor of this test asks nothing.
     expect(asked).toHaveLength(1);
   });

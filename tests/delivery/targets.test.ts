@@ -3,7 +3,8 @@ import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { describe, expect, it } from 'vitest';
 import { isPublicAddress } from '../../server/delivery/net/addresses.ts';
-import { createGuard, failureText, RefusedTarget } from '../../server/delivery/net/guard.ts';
+import { failureText } from '../../server/delivery/net/failure.ts';
+import { createGuard, RefusedTarget } from '../../server/delivery/net/guard.ts';
 
 const address = (text: string): LookupAddress => ({ address: text, family: text.includes(':') ? 6 : 4 });
 const resolveTo = (...answers: string[][]) => {

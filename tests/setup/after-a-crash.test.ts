@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { freePort } from '../../server/database/mariadb-process.ts';
 import { programEnvironment } from '../../server/database/mariadb-folder.ts';
-import { databasePids, startDawnvane, temporaryFolder } from '../support/start-dawnvane.ts';
+import { databasePids, production, startDawnvane, temporaryFolder } from '../support/start-dawnvane.ts';
 
 const minutesMs = 180_000;
 const folder = temporaryFolder();
@@ -33,19 +33,19 @@ async function startByHand(whose: 'ours' | 'a stranger'): Promise<{ pid: number;
 }
 
 beforeAll(async () => {
-  const first = await startDawnvane({ DAWNVANE_DATA: data });
+  const first = await startDawnvane({ ...production, DAWNVANE_DATA: data });
   expect(await first.stop(), first.output()).toBe(0);
 }, minutesMs);
 afterAll(() => folder.remove());
 
 describe('after a crash', { timeout: minutesMs }, () => {
   it('the database of a server that was killed outright ends in order by itself, and the next start is ready', async () => {
-    const killed = await startDawnvane({ DAWNVANE_DATA: data });
+    const killed = await startDawnvane({ ...production, DAWNVANE_DATA: data });
     killed.signal('SIGKILL');
     await killed.ended;
     while (databasePids(data).length > 0) await pause(25);
     expect(readFileSync(join(data, 'mariadb.log'), 'utf8')).toMatch(/Shutdown complete/);
-    const next = await startDawnvane({ DAWNVANE_DATA: data });
+    const next = await startDawnvane({ ...production, DAWNVANE_DATA: data });
     expect(next.address, next.output()).not.toBeNull();
     expect(await next.stop()).toBe(0);
   });
@@ -53,7 +53,7 @@ describe('after a crash', { timeout: minutesMs }, () => {
   it('a database of ours that was left behind is ended, and a fresh one serves', async () => {
     writeFileSync(join(data, 'mariadb-init.sql'), '');
     const left = await startByHand('ours');
-    const next = await startDawnvane({ DAWNVANE_DATA: data });
+    const next = await startDawnvane({ ...production, DAWNVANE_DATA: data });
     expect(next.address, next.output()).not.toBeNull();
     await left.ended;
     expect(databasePids(data)).not.toContain(left.pid);
@@ -62,7 +62,7 @@ describe('after a crash', { timeout: minutesMs }, () => {
 
   it("a stranger's database on our folder is left alone and named", async () => {
     const stranger = await startByHand('a stranger');
-    const next = await startDawnvane({ DAWNVANE_DATA: data });
+    const next = await startDawnvane({ ...production, DAWNVANE_DATA: data });
     expect(await next.ended).toBe(1);
     expect(next.output().trim()).toBe(`Another MariaDB is using ${data}/mariadb: end that one, or set DAWNVANE_DATA to another folder.`);
     expect(() => process.kill(stranger.pid, 0)).not.toThrow();
@@ -74,7 +74,7 @@ describe('after a crash', { timeout: minutesMs }, () => {
     rmSync(join(data, 'mariadb.new'), { recursive: true, force: true });
     renameSync(join(data, 'mariadb'), join(data, 'mariadb.new'));
     rmSync(join(data, 'mariadb.new', 'ibdata1'));
-    const next = await startDawnvane({ DAWNVANE_DATA: data });
+    const next = await startDawnvane({ ...production, DAWNVANE_DATA: data });
     expect(next.address, next.output()).not.toBeNull();
     expect(await next.stop()).toBe(0);
   });

@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
 import { createDatabase, execute, select } from '../../server/database/connection.ts';
 import { freePort } from '../../server/database/mariadb-process.ts';
-import { databasePids, startDawnvane, temporaryFolder } from '../support/start-dawnvane.ts';
+import { databasePids, production, startDawnvane, temporaryFolder } from '../support/start-dawnvane.ts';
 
 const minutesMs = 180_000;
 const folder = temporaryFolder();
@@ -29,7 +29,7 @@ const withChange = (change: (copy: URL) => void): string => {
 
 describe('DATABASE_URL', { timeout: minutesMs }, () => {
   it('makes the start command use that database and start none of its own', async () => {
-    const dawnvane = await startDawnvane({ DAWNVANE_DATA: data, DATABASE_URL: url.href });
+    const dawnvane = await startDawnvane({ ...production, DAWNVANE_DATA: data, DATABASE_URL: url.href });
     expect(dawnvane.address, dawnvane.output()).not.toBeNull();
     expect(databasePids(data)).toEqual([]);
     const tables = await select<{ name: string }>(admin, 'SELECT table_name AS name FROM information_schema.tables WHERE table_schema = :name', { name });
@@ -41,7 +41,7 @@ describe('DATABASE_URL', { timeout: minutesMs }, () => {
     ['a wrong password', withChange((copy) => (copy.password = 'not-the-password')), /refuses the user or the password.*DATABASE_URL/],
     ['a database that is not there', withChange((copy) => (copy.pathname = '/nowhere_at_all')), /has no such database: create it, or correct DATABASE_URL/],
   ])('with %s gives one sentence without the password', async (_what, wrong, sentence) => {
-    const dawnvane = await startDawnvane({ DAWNVANE_DATA: data, DATABASE_URL: wrong });
+    const dawnvane = await startDawnvane({ ...production, DAWNVANE_DATA: data, DATABASE_URL: wrong });
     expect(await dawnvane.ended).toBe(1);
     expect(dawnvane.output().trim()).toMatch(sentence);
     expect(dawnvane.output().trim().split('\n')).toHaveLength(1);
@@ -50,7 +50,7 @@ describe('DATABASE_URL', { timeout: minutesMs }, () => {
 
   it('where nothing answers gives one sentence', async () => {
     const port = await freePort();
-    const dawnvane = await startDawnvane({ DAWNVANE_DATA: data, DATABASE_URL: withChange((copy) => (copy.port = String(port))) });
+    const dawnvane = await startDawnvane({ ...production, DAWNVANE_DATA: data, DATABASE_URL: withChange((copy) => (copy.port = String(port))) });
     expect(await dawnvane.ended).toBe(1);
     expect(dawnvane.output().trim()).toBe(`No database answers at 127.0.0.1:${port}/${name}: start it, or correct DATABASE_URL.`);
   });
@@ -58,7 +58,7 @@ describe('DATABASE_URL', { timeout: minutesMs }, () => {
   it('of a newer version is refused', async () => {
     const newer = createDatabase(url.href, { poolMax: 1 });
     await execute(newer, "INSERT INTO schema_steps (name) VALUES ('9999-from-the-future.ts')");
-    const dawnvane = await startDawnvane({ DAWNVANE_DATA: data, DATABASE_URL: url.href });
+    const dawnvane = await startDawnvane({ ...production, DAWNVANE_DATA: data, DATABASE_URL: url.href });
     expect(await dawnvane.ended).toBe(1);
     expect(dawnvane.output()).toMatch(/written by a newer version of Dawnvane \(step 9999-from-the-future\.ts\)/);
     await newer.close();

@@ -46,6 +46,13 @@ describe('the start command on an empty data folder', { timeout: minutesMs }, ()
     started.length = 0; // Kept over the following sentences, until it is stopped below.
   });
 
+  it('serves the client, and prints who may sign in to the demo', async () => {
+    const page = await fetch(`${first.address}/`);
+    expect(page.headers.get('content-type')).toMatch(/text\/html/);
+    expect(await page.text()).toMatch(/<div id="root">/);
+    expect(first.output()).toMatch(/\(owner\)[^]*\(applicator\)[^]*\(crew\)[^]*\(observer\)/);
+  });
+
   it('keeps passwords and secrets where only its own user reads them', () => {
     expect(statSync(data).mode & 0o777).toBe(0o700);
     for (const name of ['database-password', 'server-secret']) {

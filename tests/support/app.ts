@@ -88,3 +88,16 @@ export async function createTestApp(given: { settings?: Partial<AppSettings>; pa
   const app = createApp(services, parts);
   return { app, services, parts, clock, browser: () => supertest.agent(app).set('Origin', origin), close };
 }
+
+/** The statements that reach the database while some work is done. */
+export async function statementsDuring({ services }: TestApp, work: () => Promise<void>): Promise<string[]> {
+  const { options } = services.sequelize as unknown as { options: { logging: false | ((sql: string) => void) } };
+  const statements: string[] = [];
+  options.logging = (sql) => void statements.push(sql);
+  try {
+    await work();
+  } finally {
+    options.logging = false;
+  }
+  return statements;
+}

@@ -25,6 +25,17 @@ function cleanEnvironment(): NodeJS.ProcessEnv {
   return Object.fromEntries(Object.entries(process.env).filter(([name]) => !/^(DAWNVANE_|npm_|VITE|VITEST|NODE_ENV$|PORT$|HOST$|DATABASE_URL$|ROLES$|PUBLIC_URL$|TEST$)/.test(name)));
 }
 
+/** A production server that knows nobody yet: it is up at once, and has no farm to fetch or send anything for. */
+export const production = {
+  DAWNVANE_MODE: 'production',
+  DAWNVANE_SECRET: Buffer.alloc(32, 7).toString('base64'),
+  PUBLIC_URL: 'https://spray.example.org',
+  FORECAST_PROVIDERS: 'openMeteo',
+  CONTACT: 'mailto:keeper@example.org',
+  SMTP_URL: 'smtp://127.0.0.1:9',
+  MAIL_FROM: 'Dawnvane <notices@example.org>',
+};
+
 /** Begins `npm start`'s command as a child; `port` 0 unless the variables say otherwise. */
 export function launchDawnvane(variables: Record<string, string>, flags: string[] = []): Omit<StartedDawnvane, 'address'> {
   const child = spawn(process.execPath, [join(root, 'server/setup/start.mjs'), ...flags], { cwd: tmpdir(), env: { ...cleanEnvironment(), PORT: '0', LOG_LEVEL: 'warn', ...variables }, stdio: ['ignore', 'pipe', 'pipe'] });
@@ -47,7 +58,7 @@ export function launchDawnvane(variables: Record<string, string>, flags: string[
 /** Starts the real command and waits until it is ready or over. */
 export async function startDawnvane(variables: Record<string, string>, flags: string[] = []): Promise<StartedDawnvane> {
   const launched = launchDawnvane(variables, flags);
-  const address = () => /ready at (\S+)/.exec(launched.output())?.[1] ?? null;
+  const address = () => /listening on ([^\s)]+)/.exec(launched.output())?.[1] ?? /ready at (\S+)/.exec(launched.output())?.[1] ?? null;
   let over = false;
   void launched.ended.then(() => (over = true));
   while (!over && !/is ready/.test(launched.output())) await new Promise((resolve) => setTimeout(resolve, 25));

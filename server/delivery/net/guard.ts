@@ -82,12 +82,3 @@ export function createGuard(permittedHosts: readonly string[], resolve: Resolve 
     stop: () => agent.close(),
   };
 }
-
-/** A network failure in words for the log: the cause, not the wrapper. */
-export function failureText(error: unknown): string {
-  if (!(error instanceof Error)) return 'The call failed.';
-  if (error.name === 'TimeoutError') return 'No answer in time.';
-  const cause = error.cause instanceof Error ? error.cause : error;
-  const code = (cause as NodeJS.ErrnoException).code;
-  return code ? `${cause.message || 'The call failed'} (${code})` : cause.message;
-}

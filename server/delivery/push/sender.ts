@@ -2,7 +2,8 @@ import { Op } from 'sequelize';
 import webPush from 'web-push';
 import type { DeviceRow } from '../../models/notices.ts';
 import type { Services } from '../../services.ts';
-import { failureText, RefusedTarget, type Guard } from '../net/guard.ts';
+import type { Guard } from '../net/guard.ts';
+import { failureOutcome } from '../net/failure.ts';
 import type { PushPayload } from '../payloads.ts';
 import { clipped, retryAfterSeconds, type ClaimedDelivery, type Outcome, type Sender, type Settled } from '../sender.ts';
 import { acknowledgementToken } from './acknowledgement.ts';
@@ -61,11 +62,10 @@ export function createPushSender(services: Services, keys: PushKeys, guard: Guar
     try {
       const response = await post(delivery, device, false);
       if (response.status !== 413) return await answer(response);
-      await response.body?.cancel();
+      void response.body?.cancel().catch(() => undefined);
       return await answer(await post(delivery, device, true));
     } catch (error) {
-      if (error instanceof RefusedTarget || error instanceof Error && error.cause instanceof RefusedTarget) return { kind: 'refused', status: null, detail: clipped(failureText(error)) };
-      return { kind: 'retry', status: null, detail: clipped(failureText(error)), retryAfterSeconds: null };
+      return failureOutcome(error);
     }
   }
 

@@ -2,7 +2,8 @@ import { Op } from 'sequelize';
 import { Webhook } from 'standardwebhooks';
 import type { WebhookRow } from '../../models/notices.ts';
 import type { Services } from '../../services.ts';
-import { failureText, RefusedTarget, type Guard } from '../net/guard.ts';
+import { failureOutcome } from '../net/failure.ts';
+import type { Guard } from '../net/guard.ts';
 import { clipped, retryAfterSeconds, type ClaimedDelivery, type Outcome, type Sender } from '../sender.ts';
 import { unsealWebhookSecret } from './secrets.ts';
 
@@ -39,8 +40,7 @@ export function createWebhookSender(services: Services, guard: Guard): Sender {
       });
       return await answer(response);
     } catch (error) {
-      const refused = error instanceof RefusedTarget || (error instanceof Error && error.cause instanceof RefusedTarget);
-      return refused ? { kind: 'refused', status: null, detail: clipped(failureText(error)) } : { kind: 'retry', status: null, detail: clipped(failureText(error)), retryAfterSeconds: null };
+      return failureOutcome(error);
     }
   }
 
@@ -100,7 +100,8 @@ async function beginning(response: Response): Promise<string> {
   } catch {
     // The status is told already; a body that breaks off changes nothing.
   } finally {
-    await reader.cancel().catch(() => undefined);
+    // Not waited for: a far end that goes on sending must not hold the delivery.
+    void reader.cancel().catch(() => undefined);
   }
   return clipped(Buffer.concat(chunks).subarray(0, answerBytesMax).toString('utf8').trim(), 300);
 }

@@ -77,7 +77,7 @@ export function RibbonDrawing({ answer, lanes, layout, timeZone, minutesNeeded, 
             className="fill-needle"
           />
           {!upright && (
-            <text x={clampTime(along(job))} y={layout.lanesTo + 25} className="ribbon-small" dy={0} textAnchor="start">
+            <text x={clampTime(along(job))} y={layout.lanesTo + 32} className="ribbon-small" dy={0} textAnchor="start">
               {`${minutesNeeded} min from ${clockTime(job, { units, timeZone })}`}
             </text>
           )}
@@ -148,7 +148,7 @@ const Knot = ({ place }: { place: number }) => (
   </g>
 );
 
-const knotNameRoom = 92;
+const knotNameRoom = 96;
 
 /** What runs out at a knot, beside it, as far as names do not collide. */
 function KnotNames({ lane, index, layout, answer, units }: { lane: Lane; index: number; layout: Layout; answer: AssessmentAnswer; units: UnitSystem }) {

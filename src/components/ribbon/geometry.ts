@@ -1,5 +1,5 @@
 import type { AssessmentStep, LimitName } from '../../../shared/assessment/answer.ts';
-import { limitNames } from '../../../shared/assessment/answer.ts';
+import { limitNames } from '../../../shared/assessment/limit-names.ts';
 
 /** One stretch of a ribbon in step indexes, ends included. */
 export interface Stretch {

@@ -25,8 +25,8 @@ export interface Layout {
   indexAt(shareX: number, shareY: number): number;
 }
 
-const wide = { width: 900, gutter: 118, end: 14, axis: 24, sky: 30, lane: 46, job: 26 };
-const tall = { width: 360, gutter: 46, end: 8, head: 92, sky: 22, step: 7.4, foot: 12 };
+const wide = { width: 660, gutter: 112, end: 14, axis: 24, sky: 26, lane: 40, job: 36 };
+const tall = { width: 360, gutter: 46, end: 8, head: 118, sky: 22, step: 7.4, foot: 12 };
 
 export function layoutOf({ steps, lanes, upright }: { steps: number; lanes: number; upright: boolean }): Layout {
   const last = Math.max(1, steps - 1);

@@ -1,6 +1,6 @@
 import type { LimitAtStep, LimitName } from '../../../shared/assessment/answer.ts';
 import type { UnitSystem } from '../../../shared/units/units.ts';
-import { quantityText } from '../../lib/quantities.ts';
+import { unitsOf, type Quantity } from '../../lib/quantities.ts';
 
 /** Name of each limit where there is room for two words. */
 export const limitWord: Record<LimitName, string> = {
@@ -32,6 +32,14 @@ export const limitSentence: Record<LimitName, string> = {
 
 const percent = (share: number): string => `${Math.round(share * 100)} %`;
 
+/** To the digit that can be felt: a tenth for wind, a whole degree Fahrenheit or half a degree Celsius. */
+function rounded(value: number, quantity: Quantity, units: UnitSystem): string {
+  const { name, fromSi } = unitsOf[quantity][units];
+  const own = fromSi(value);
+  const shown = quantity === 'speed' ? Number(own.toFixed(1)) : units === 'us' ? Math.round(own) : Math.round(own * 2) / 2;
+  return `${shown} ${name}`;
+}
+
 /** A value with its unit, as one reads it at the time cursor. */
 export function valueText(limit: LimitName, value: number | null, units: UnitSystem): string {
   if (value === null) return 'not known';
@@ -39,13 +47,13 @@ export function valueText(limit: LimitName, value: number | null, units: UnitSys
     case 'wind':
     case 'gusts':
     case 'stillAir':
-      return quantityText(value, 'speed', units);
+      return rounded(value, 'speed', units);
     case 'temperature':
-      return quantityText(value, 'temperature', units);
+      return rounded(value, 'temperature', units);
     case 'deltaT':
-      return quantityText(value, 'temperatureSpan', units);
+      return rounded(value, 'temperatureSpan', units);
     case 'rainFree':
-      return `${Number(value.toFixed(1))} dry h`;
+      return `${value >= 24 ? 'over 24' : Number(value.toFixed(1))} dry h`;
     case 'towardSensitivePlace':
       return `${Math.round(value)}°`;
     case 'inversion':

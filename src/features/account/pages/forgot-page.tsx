@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { accountEndpoints } from '../../../../shared/api/accounts.ts';
-import { Fields, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { useRequestReset } from '../api/account.ts';
 import { OutsidePage } from '../components/outside-page.tsx';

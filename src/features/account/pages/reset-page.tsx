@@ -1,7 +1,8 @@
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { resetBody } from '../../../../shared/api/accounts.ts';
-import { Fields, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { paths } from '../../../lib/paths.ts';
 import { useResetPassword } from '../api/account.ts';

@@ -1,7 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link, Navigate, useSearchParams } from 'react-router-dom';
 import { signInBody } from '../../../../shared/api/accounts.ts';
-import { Fields, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { paths, safeNext } from '../../../lib/paths.ts';
 import { meQuery } from '../../../lib/session/get-me.ts';

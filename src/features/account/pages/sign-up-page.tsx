@@ -1,7 +1,8 @@
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { signUpBody, type Units } from '../../../../shared/api/accounts.ts';
-import { ChoiceField, Fields, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { ChoiceField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { paths } from '../../../lib/paths.ts';
 import { useSignUp } from '../api/account.ts';

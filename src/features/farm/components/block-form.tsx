@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import { blockBody, type Block } from '../../../../shared/api/farms.ts';
-import { Fields, NotesField, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { NotesField, NumberField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import type { FormPart } from '../../../lib/forms/form-part.ts';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 

@@ -1,7 +1,8 @@
 import type { z } from 'zod';
 import { farmBody, type Farm } from '../../../../shared/api/farms.ts';
 import { UseMyPlace } from '../../../components/use-my-place.tsx';
-import { ChoiceField, Fields, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { ChoiceField, NumberField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { choices } from '../../../lib/forms/choices.ts';
 import type { FormPart } from '../../../lib/forms/form-part.ts';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';

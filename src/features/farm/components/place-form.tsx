@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import { placeBody, type SensitivePlace } from '../../../../shared/api/farms.ts';
-import { ChoiceField, Fields, NotesField, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { ChoiceField, NotesField, NumberField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { choices } from '../../../lib/forms/choices.ts';
 import type { FormPart } from '../../../lib/forms/form-part.ts';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';

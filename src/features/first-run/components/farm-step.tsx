@@ -1,7 +1,8 @@
 import type { z } from 'zod';
 import { farmBody, type Farm } from '../../../../shared/api/farms.ts';
 import { UseMyPlace } from '../../../components/use-my-place.tsx';
-import { Fields, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { NumberField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { useMe } from '../../../lib/session/session.ts';
 import { useCreateFarm } from '../../farm/api/farm.ts';

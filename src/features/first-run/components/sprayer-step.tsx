@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import { sprayerBody, type Sprayer } from '../../../../shared/api/farms.ts';
-import { Fields, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { NumberField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { sprayersApi } from '../../farm/api/sprayers.ts';
 

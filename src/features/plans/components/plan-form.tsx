@@ -1,7 +1,8 @@
 import type { z } from 'zod';
 import type { Block, Sprayer } from '../../../../shared/api/farms.ts';
 import { planBody, planProblems, type Plan, type Product } from '../../../../shared/api/plans.ts';
-import { CheckField, CheckGroup, ChoiceField, Fields, MoreFields, NotesField, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { CheckField, CheckGroup, ChoiceField, NotesField, NumberField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, MoreFields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { choices } from '../../../lib/forms/choices.ts';
 import type { FormPart } from '../../../lib/forms/form-part.ts';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';

@@ -1,6 +1,7 @@
 import { productBody, productProblems, type Product } from '../../../../shared/api/plans.ts';
 import type { z } from 'zod';
-import { CheckField, ChoiceField, Fields, NotesField, NumberField, RecordForm, TextField } from '../../../lib/forms/fields.tsx';
+import { CheckField, ChoiceField, NotesField, NumberField, TextField } from '../../../lib/forms/fields.tsx';
+import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { rateUnitWords } from '../../../lib/rate-words.ts';
 import type { FormPart } from '../../../lib/forms/form-part.ts';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
