@@ -29,6 +29,8 @@ export interface DemoFakesOptions {
   dataFolder: string | null;
   /** Decides the weather: the same seed gives the same days. */
   seed: number;
+  /** Height of the demo farm above the sea, m. */
+  elevationM?: number;
   signIns?: DemoParts['signIns'];
   phoneNames?: string[];
 }
@@ -36,12 +38,12 @@ export interface DemoFakesOptions {
 const loopback = /^(localhost|127\.0\.0\.1|\[::1\]|dawnvane\.test)$/;
 
 /** Starts the fakes of every far end: forecast providers, push service with phones, mail relay, webhook receiver. Other calls leave the process only to loopback. */
-export async function startDemoFakes({ clock, dataFolder, seed, signIns = [], phoneNames = ['Demo phone'] }: DemoFakesOptions): Promise<DemoFakes> {
+export async function startDemoFakes({ clock, dataFolder, seed, elevationM = 210, signIns = [], phoneNames = ['Demo phone'] }: DemoFakesOptions): Promise<DemoFakes> {
   const folder = dataFolder === null ? null : join(dataFolder, 'demo');
   if (folder) mkdirSync(folder, { recursive: true, mode: 0o700 });
   const file = (name: string): string | null => (folder ? join(folder, name) : null);
   const phones = phoneNames.map((name, index) => new DemoPhone(name, file(`phone-${index}.json`)));
-  const providers = createProviderFakes({ clock, seed });
+  const providers = createProviderFakes({ clock, seed, elevationM });
   const push = createPushService({ clock, phones, logFile: file('pushes.json') });
   const webhook = createWebhookReceiver({ clock, logFile: file('hooks.json'), secretFile: file('webhook-secret') });
   const mail = await startMailSink({ clock, logFile: file('mails.json') });

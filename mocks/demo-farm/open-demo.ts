@@ -8,7 +8,7 @@ import type { Parts } from '../../server/parts.ts';
 import type { Services } from '../../server/services.ts';
 import { demoHosts, startDemoFakes, type DemoFakes } from '../demo-fakes.ts';
 import { keptClock } from './demo-clock.ts';
-import { demoPassword, demoPeople, demoTimeZone } from './facts.ts';
+import { demoFarm, demoPassword, demoPeople, demoTimeZone } from './facts.ts';
 import { seedDemoFarm, type SeededFarm } from './seed.ts';
 
 /** The evening on which the demo opens, an hour before the eve notice. */
@@ -31,7 +31,7 @@ export async function openDemo(base: Services, dataFolder: string): Promise<Open
   const { clock, stop } = keptClock(join(dataFolder, 'demo', 'clock.json'), DateTime.fromJSDate(demoOpensAt).minus({ days: daysBefore }).toJSDate());
   const services: Services = { ...base, clock, settings: { ...base.settings, permittedHosts: [...base.settings.permittedHosts, ...demoHosts] } };
   const signIns = demoPeople.map(({ name, email, role }) => ({ name, email, role, password: demoPassword }));
-  const fakes = await startDemoFakes({ clock, dataFolder, seed: demoSeed, signIns });
+  const fakes = await startDemoFakes({ clock, dataFolder, seed: demoSeed, elevationM: demoFarm.elevationM, signIns });
   return {
     services,
     fakes,

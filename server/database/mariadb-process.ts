@@ -39,6 +39,7 @@ export interface MariaDbOptions {
 const socketPathMax = 100;
 const readyTimeoutMs = 60_000;
 const stopTimeoutMs = 30_000;
+const askAgainMs = 500;
 const portTriesMax = 3;
 const pause = (ms: number) => new Promise<void>((resolve) => setTimeout(resolve, ms));
 
@@ -63,9 +64,9 @@ function isAlive(pid: number): boolean {
 }
 
 async function endLeftOver(pid: number): Promise<void> {
-  process.kill(pid, 'SIGTERM');
   for (let waitedMs = 0; waitedMs < stopTimeoutMs; waitedMs += 50) {
     if (!isAlive(pid)) return;
+    if (waitedMs % askAgainMs === 0) process.kill(pid, 'SIGTERM');
     await pause(50);
   }
   process.kill(pid, 'SIGKILL');
@@ -188,8 +189,11 @@ function supervise(child: ChildProcess, elsewhere: string | null, throwAway: boo
     ended,
     async stop(outright = throwAway) {
       child.kill(outright ? 'SIGKILL' : 'SIGTERM');
+      // While it comes up it loses a SIGTERM: ask again.
+      const again = setInterval(ask, askAgainMs);
       const late = setTimeout(() => child.kill('SIGKILL'), stopTimeoutMs);
       await ended;
+      clearInterval(again);
       clearTimeout(late);
     },
   };

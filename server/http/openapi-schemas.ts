@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { meSchema } from '../../shared/api/accounts.ts';
-import { polygonSchema, problemItemSchema, problemSchema } from '../../shared/api/common.ts';
+import { conflictSchema, polygonSchema, problemItemSchema, problemSchema } from '../../shared/api/common.ts';
 import { blockSchema, farmSchema, placeSchema, sprayerSchema } from '../../shared/api/farms.ts';
 import { daybreakSchema, forecastFactsSchema, morningSchema, planVerdictSchema, readingSchema } from '../../shared/api/mornings.ts';
 import { noticeEventSchema } from '../../shared/api/notice-event.ts';
@@ -15,7 +15,7 @@ export type Json = Record<string, unknown>;
 
 /** Things that answers are made of, by the name that readers of the description see. */
 const answers = {
-  Problem: problemSchema, ProblemItem: problemItemSchema, Me: meSchema, Farm: farmSchema, Block: blockSchema, SensitivePlace: placeSchema, Sprayer: sprayerSchema, Product: productSchema, Plan: planSchema,
+  Problem: problemSchema, Conflict: conflictSchema, ProblemItem: problemItemSchema, Me: meSchema, Farm: farmSchema, Block: blockSchema, SensitivePlace: placeSchema, Sprayer: sprayerSchema, Product: productSchema, Plan: planSchema,
   Polygon: polygonSchema, Daybreak: daybreakSchema, Morning: morningSchema, PlanVerdict: planVerdictSchema, ForecastFacts: forecastFactsSchema, Assessment: answerSchema, Reading: readingSchema, Notice: noticeSchema,
   Delivery: deliverySchema, Device: deviceSchema, Wishes: wishesBody, Webhook: webhookSchema, InboundSource: inboundSourceSchema, Member: memberSchema, Invitation: invitationSchema, AuditEntry: auditEntrySchema, NoticeEvent: noticeEventSchema, Health: healthSchema,
 } satisfies Record<string, z.ZodType>;

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { problemSchema } from '../../shared/api/common.ts';
+import { conflictSchema, problemSchema } from '../../shared/api/common.ts';
 import type { Endpoint } from '../../shared/api/endpoint.ts';
 import { allEndpoints } from '../../shared/api/index.ts';
 import { inboundForecastSchema } from '../../shared/api/inbound-forecast.ts';
@@ -31,17 +31,18 @@ function requestBody({ bodyKind, body, access }: Endpoint, book: SchemaBook): Js
 
 /** How an operation may fail, from what it takes and who may call it. */
 function failures(endpoint: Endpoint, book: SchemaBook): Json {
-  const { access, bodyKind, rateLimit, method } = endpoint;
-  const problem = (description: string): Json => ({ description, content: { 'application/problem+json': { schema: book.of(problemSchema, 'output') } } });
+  const { access, bodyKind, rateLimit, method, body } = endpoint;
+  const problem = (description: string, schema: z.ZodType = problemSchema): Json => ({ description, content: { 'application/problem+json': { schema: book.of(schema, 'output') } } });
   const needsSession = access === 'signedIn' || typeof access === 'object';
-  const takesBody = bodyKind !== undefined || !takesNothing(endpoint.body);
+  const takesBody = bodyKind !== undefined || !takesNothing(body);
+  const isEdit = body instanceof z.ZodObject && 'version' in body.shape;
   return {
     ...(takesBody ? { 400: problem('The body is not understood.'), 413: problem('The body is too large.'), 415: problem('The body is of another kind than is read here.') } : {}),
     ...(needsSession ? { 401: problem('Nobody is signed in.') } : {}),
     ...(access === 'signature' ? { 401: problem('Sender, signature or date do not hold.') } : {}),
     ...(typeof access === 'object' || method !== 'get' ? { 403: problem('The role of the caller does not allow it, or the request comes from another site.') } : {}),
     404: problem('Nothing of that name, or not for the caller.'),
-    ...(method === 'put' && typeof access === 'object' ? { 409: problem('Someone else changed it since: `theirs` and `yours` hold both versions, `changedBy` and `changedAt` who and when.') } : {}),
+    ...(isEdit ? { 409: problem('Someone else changed it since the version that the edit was made from.', conflictSchema) } : {}),
     422: problem('Entries need another look; each is named by its path.'),
     ...(rateLimit ? { 429: problem('Too many tries; the header Retry-After tells how long to wait.') } : {}),
     default: problem('Anything else.'),

@@ -12,7 +12,7 @@ import type { AssessOptions, Assessor, HandedForecast } from './assessor.ts';
 import { factsOf, type ForecastSource } from './forecasting.ts';
 import { loadFarmState, type FarmState } from './farm-state.ts';
 import { comingMornings, localNoon } from './mornings.ts';
-import { judgedPlan, readingsOf, siteOf, usualPlan, type JudgedPlan } from './plan-case.ts';
+import { asForecastTells, judgedPlan, readingsOf, siteOf, usualPlan, type JudgedPlan } from './plan-case.ts';
 import { newestVerdicts, recordVerdicts } from './revisions.ts';
 import { summaryOf } from './summary.ts';
 import { notFound } from '../http/problem.ts';
@@ -62,7 +62,7 @@ export function createAssessor(services: Services, source: ForecastSource): Asse
   function answersOf(state: FarmState, forecast: ForecastRow | null, date: string, stale: boolean, only?: Judged[]): { judged: Judged; answer: AssessmentAnswer }[] {
     const prepared = prepareMorning({ site: siteOf(state.farm), date, hours: forecast?.hours ?? [], readings: readingsOf(state.readings) });
     return (only ?? judgedOn(state, date)).map((judged) => {
-      const answer = judge(prepared, judged.judged);
+      const answer = judge(prepared, asForecastTells(judged.judged, forecast?.hours ?? []));
       return { judged, answer: stale ? withoutFreshData(answer) : answer };
     });
   }
@@ -111,7 +111,7 @@ export function createAssessor(services: Services, source: ForecastSource): Asse
       const { planId, planName } = judged;
       const fresh = summaryOf(answer, { planId, planName, date, minutesNeeded: judged.judged.minutesNeeded, reserveMinutes: judged.judged.reserveMinutes, timeZone: state.farm.timeZone, decidedAt: now });
       const last = told.find((row) => row.planId === planId);
-      return { verdict: last ? { ...fresh, revision: last.revision, decidedAt: last.decidedAt.toISOString() } : fresh, answer, case: { site: siteOf(state.farm), date, ...judged.judged, hours: forecast?.hours ?? [], readings: readingsOf(state.readings) } };
+      return { verdict: last ? { ...fresh, revision: last.revision, decidedAt: last.decidedAt.toISOString() } : fresh, answer, case: { site: siteOf(state.farm), date, ...asForecastTells(judged.judged, forecast?.hours ?? []), hours: forecast?.hours ?? [], readings: readingsOf(state.readings) } };
     });
     const facts: ForecastFacts | null = forecast ? factsOf(forecast, source) : null;
     const history = told.map((row) => ({ planId: row.planId, revision: row.revision, verdict: row.verdict, headline: row.summary.headline, decidedAt: row.decidedAt.toISOString() }));

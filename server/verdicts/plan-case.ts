@@ -1,4 +1,4 @@
-import type { AssessmentCase, Reading, Site } from '../../shared/assessment/case.ts';
+import type { AssessmentCase, ForecastHour, Reading, Site } from '../../shared/assessment/case.ts';
 import { limitsOfPlan, usualLimits, usualMinutesNeeded } from '../../shared/rules/plan-limits.ts';
 import { jobOfPlan } from '../../shared/tank/minutes.ts';
 import type { FarmRow, SensitivePlaceRow } from '../models/farms.ts';
@@ -34,3 +34,12 @@ export function judgedPlan(whole: WholePlan, places: SensitivePlaceRow[]): Judge
 
 /** A morning without a plan is judged on the usual limits of the trade, for a job of the usual length. */
 export const usualPlan = (places: SensitivePlaceRow[]): JudgedPlan => ({ minutesNeeded: usualMinutesNeeded, reserveMinutes: 0, limits: usualLimits, sensitivePlaces: placesOf(places) });
+
+/**
+ * The plan as this forecast can judge it: where a provider tells no chance of rain at all, dry hours are judged by the amount
+ * alone, and the assessment says so. A single missing hour stays what it is: unknown.
+ */
+export function asForecastTells(plan: JudgedPlan, hours: readonly ForecastHour[]): JudgedPlan {
+  const silent = hours.length > 0 && hours.every((hour) => hour.precipitationProbabilityPct === null) && hours.some((hour) => hour.precipitationMm !== null);
+  return silent ? { ...plan, limits: { ...plan.limits, rainProbabilityPct: null } } : plan;
+}

@@ -27,6 +27,10 @@ export const problemSchema = z.object({
 });
 export type Problem = z.infer<typeof problemSchema>;
 
+/** 409 after two people edited one thing: both versions, who changed it (null: a person no longer here) and when. */
+export const conflictSchema = problemSchema.extend({ theirs: z.record(z.string(), z.unknown()), yours: z.record(z.string(), z.unknown()), changedBy: z.string().nullable(), changedAt: instantSchema });
+export type Conflict = z.infer<typeof conflictSchema>;
+
 /** What every stored thing of a farm carries. */
 export const storedSchema = z.object({
   id: idSchema,

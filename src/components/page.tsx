@@ -7,19 +7,21 @@ interface PageHeadingProps {
   over?: string;
   /** Address and name of the page above. */
   up?: [to: string, name: string];
+  /** A low heading, where the answer below it is what matters. */
+  low?: boolean;
   /** Actions beside the title. */
   children?: ReactNode;
 }
 
 /** The heading of a page: names the browser's tab, and takes the focus when one arrives here. */
-export function PageHeading({ title, over, up, children }: PageHeadingProps) {
+export function PageHeading({ title, over, up, low = false, children }: PageHeadingProps) {
   const heading = useRef<HTMLHeadingElement>(null);
   useEffect(() => {
     document.title = `${title} – Dawnvane`;
     heading.current?.focus({ preventScroll: true });
   }, [title]);
   return (
-    <header className="mb-6">
+    <header className={low ? 'mb-3' : 'mb-6'}>
       {up && (
         <Link to={up[0]} className="inline-flex min-h-touch items-center text-ink-soft underline decoration-ink/30 underline-offset-4">
           <span aria-hidden="true">←&nbsp;</span>
@@ -29,7 +31,7 @@ export function PageHeading({ title, over, up, children }: PageHeadingProps) {
       <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-3">
         <div>
           {over && <p className="over">{over}</p>}
-          <h1 ref={heading} tabIndex={-1}>
+          <h1 ref={heading} tabIndex={-1} {...(low ? { className: 'text-lg' } : {})}>
             {title}
           </h1>
         </div>

@@ -6,6 +6,8 @@ export type Quantity = 'speed' | 'temperature' | 'temperatureSpan' | 'area' | 'v
 interface Unit {
   /** As written beside the number. */
   name: string;
+  /** Decimals where significant digits would say too much. */
+  decimals?: number;
   fromSi: (value: number) => number;
   toSi: (value: number) => number;
 }
@@ -24,15 +26,16 @@ export const unitsOf: Record<Quantity, Record<UnitSystem, Unit>> = {
   carrier: { us: { name: 'gal/acre', fromSi: litresPerHaToGallonsPerAcre, toSi: gallonsPerAcreToLHa }, metric: si('L/ha') },
   distance: { us: { name: 'ft', fromSi: metresToFeet, toSi: feetToM }, metric: si('m') },
   height: { us: { name: 'ft', fromSi: metresToFeet, toSi: feetToM }, metric: si('m') },
-  rain: { us: { name: 'in', fromSi: millimetresToInches, toSi: inchesToMm }, metric: si('mm') },
+  rain: { us: { name: 'in', decimals: 3, fromSi: millimetresToInches, toSi: inchesToMm }, metric: si('mm') },
   plain: { us: plain, metric: plain },
 };
 
 const significantDigits = 4;
 
-/** A number as text to type over: at most four significant digits, whole above a thousand, no trailing zeros. */
-export function asTyped(value: number): string {
+/** A number as text to type over: at most four significant digits (or the unit's decimals), whole above a thousand, no trailing zeros. */
+export function asTyped(value: number, decimals?: number): string {
   if (!Number.isFinite(value)) return '';
+  if (decimals !== undefined) return String(Number(value.toFixed(decimals)));
   if (Math.abs(value) >= 1000) return String(Math.round(value));
   return String(Number(value.toPrecision(significantDigits)));
 }
@@ -74,6 +77,14 @@ export function inOwnUnits(sentence: string, units: UnitSystem, quantity: Quanti
 /** A stored value with its unit, in the person's units: `10 mph`; a dash when there is none. */
 export function quantityText(value: number | null, quantity: Quantity, units: UnitSystem): string {
   if (value === null) return '—';
-  const { name, fromSi } = unitsOf[quantity][units];
-  return `${Number(fromSi(value).toPrecision(3))}${name === '' ? '' : ` ${name}`}`;
+  const { name, fromSi, decimals } = unitsOf[quantity][units];
+  const figure = fromSi(value);
+  return `${Number(decimals === undefined ? figure.toPrecision(3) : figure.toFixed(decimals))}${name === '' ? '' : ` ${name}`}`;
+}
+
+/** `1 to 10 mph`, `at most 20 mph`, or nothing. */
+export function rangeText(low: number | null, high: number | null, quantity: Quantity, units: UnitSystem): string {
+  if (low === null) return high === null ? '' : `at most ${quantityText(high, quantity, units)}`;
+  if (high === null) return `at least ${quantityText(low, quantity, units)}`;
+  return `${quantityText(low, quantity, units).split(' ')[0]} to ${quantityText(high, quantity, units)}`;
 }

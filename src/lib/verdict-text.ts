@@ -24,8 +24,8 @@ export function why(verdict: PlanVerdict, { units, timeZone }: Reader): string {
   return verdict.headline[units];
 }
 
-/** `45 minutes open; the job needs 31 and 10 to spare.` */
+/** `Open 45 min; the job needs 31, and 10 to spare.` */
 export function minutesText({ window, minutesNeeded, reserveMinutes }: Pick<PlanVerdict, 'window' | 'minutesNeeded' | 'reserveMinutes'>): string {
-  const needed = `the job needs ${minutesNeeded}${reserveMinutes > 0 ? ` and ${reserveMinutes} to spare` : ''}`;
-  return window ? `${Math.round(window.minutes)} minutes open; ${needed}.` : `No minute open; ${needed}.`;
+  const open = window ? `Open ${Math.round(window.minutes)} min` : 'Open no minute';
+  return `${open}; the job needs ${minutesNeeded}${reserveMinutes > 0 ? `, and ${reserveMinutes} to spare` : ''}.`;
 }

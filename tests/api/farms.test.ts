@@ -11,7 +11,7 @@ let assessingFails = false;
 beforeAll(async () => {
   app = await createTestApp({
     settings: { demo: true },
-    parts: (_services, resting) => ({
+    parts: (_services, _clock, resting) => ({
       assessor: {
         ...resting.assessor,
         assessFarm: async (farmId, options) => {

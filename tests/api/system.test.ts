@@ -5,7 +5,7 @@ import { createTestApp, type TestApp } from '../support/app.ts';
 let app: TestApp;
 let worker: WorkerStatus = { state: 'ok', lastRunAt: null, waiting: 0 };
 beforeAll(async () => {
-  app = await createTestApp({ parts: (_services, resting) => ({ worker: { ...resting.worker, status: async () => worker } }) });
+  app = await createTestApp({ parts: (_services, _clock, resting) => ({ worker: { ...resting.worker, status: async () => worker } }) });
 });
 afterAll(() => app.close());
 

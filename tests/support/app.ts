@@ -75,16 +75,16 @@ export async function createTestServices(settings: Partial<AppSettings> = {}): P
 }
 
 /** The whole HTTP application on an empty database; parts not given rest. */
-export async function createTestApp(given: { settings?: Partial<AppSettings>; parts?: (services: Services, resting: Parts) => Partial<Parts> | Promise<Partial<Parts>> } = {}): Promise<TestApp> {
+export async function createTestApp(given: { settings?: Partial<AppSettings>; parts?: (services: Services, clock: SettableClock, resting: Parts) => Partial<Parts> | Promise<Partial<Parts>> } = {}): Promise<TestApp> {
   const { services, clock, close } = await createTestServices(given.settings);
   const resting: Parts = {
     assessor: restingAssessor(clock),
-    pushKeys: { current: { id: '0'.repeat(16), publicKey: 'B'.repeat(87), privateKey: 'x' }, get: async () => null } as unknown as Parts['pushKeys'],
+    pushKeys: { current: { id: '0'.repeat(16), publicKey: 'B'.repeat(87), privateKey: 'x' }, byId: () => null },
     worker: { start: () => undefined, stop: async () => undefined, drain: async () => undefined, status: async () => ({ state: 'stopped', lastRunAt: null, waiting: null }) },
-    scheduler: { start: () => undefined, stop: async () => undefined, tick: async () => undefined } as unknown as Parts['scheduler'],
+    scheduler: { start: () => undefined, stop: async () => undefined, tick: async () => undefined, nextDueAt: async () => null, nudge: () => undefined },
     demo: null,
   };
-  const parts: Parts = { ...resting, ...(await given.parts?.(services, resting)) };
+  const parts: Parts = { ...resting, ...(await given.parts?.(services, clock, resting)) };
   const app = createApp(services, parts);
   return { app, services, parts, clock, browser: () => supertest.agent(app).set('Origin', origin), close };
 }

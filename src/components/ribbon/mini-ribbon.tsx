@@ -20,7 +20,7 @@ export function MiniRibbon({ headroom, sunAltitudeDeg, className = '' }: MiniRib
   const drawn = { ...lane, stretches: [...lane.stretches], knots: [], headroom: [...headroom] };
   const wideStep = width / sunAltitudeDeg.length;
   return (
-    <svg viewBox={`0 0 ${width} ${height}`} className={`ribbon ${className}`} aria-hidden="true">
+    <svg viewBox={`0 0 ${width} ${height}`} preserveAspectRatio="none" className={`ribbon ${className}`} aria-hidden="true">
       {sunAltitudeDeg.map((altitude, index) => (
         <rect key={index} x={index * wideStep} width={wideStep + 0.5} height={sky} fill={skyColour(altitude)} />
       ))}

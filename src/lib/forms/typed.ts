@@ -19,9 +19,15 @@ function walk(value: Json, path: string[], numbers: NumberFields, change: (value
 
 const at = (value: Json, path: string): Json => path.split('.').reduce<Json>((inside, part) => (typeof inside === 'object' && inside !== null ? (inside as Record<string, Json>)[part] : undefined), value);
 
+/** A stored number as it stands in the form. */
+function shown(value: number, quantity: Quantity, units: UnitSystem): string {
+  const { fromSi, decimals } = unitsOf[quantity][units];
+  return asTyped(fromSi(value), decimals);
+}
+
 /** A stored body as text to edit. */
 export function typedFrom<T>(body: T, numbers: NumberFields, units: UnitSystem): Typed<T> {
-  return walk(body, [], numbers, (value, quantity) => (typeof value === 'number' ? asTyped(unitsOf[quantity][units].fromSi(value)) : '')) as Typed<T>;
+  return walk(body, [], numbers, (value, quantity) => (typeof value === 'number' ? shown(value, quantity, units) : '')) as Typed<T>;
 }
 
 /**
@@ -31,8 +37,8 @@ export function typedFrom<T>(body: T, numbers: NumberFields, units: UnitSystem):
 export function bodyFrom<T>(typed: Typed<T>, numbers: NumberFields, units: UnitSystem, stored: T | undefined): unknown {
   return walk(typed, [], numbers, (text, quantity, path) => {
     const before = at(stored, path);
-    const { fromSi, toSi } = unitsOf[quantity][units];
-    if (typeof before === 'number' && text === asTyped(fromSi(before))) return before;
+    const { toSi } = unitsOf[quantity][units];
+    if (typeof before === 'number' && text === shown(before, quantity, units)) return before;
     const value = readNumber(String(text ?? ''), units);
     if (value === null) return null;
     return Number.isNaN(value) ? String(text) : toSi(value);

@@ -1,7 +1,7 @@
 import { Link, useNavigate } from 'react-router-dom';
 import { changePasswordBody, profileBody } from '../../../../shared/api/accounts.ts';
 import { useState } from 'react';
-import { Button, PageHeading, Panel, useToast } from '../../../components/index.ts';
+import { Button, PageHeading, Panel, ThemeToggle, useToast } from '../../../components/index.ts';
 import { ChoiceField, TextField } from '../../../lib/forms/fields.tsx';
 import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
@@ -25,6 +25,9 @@ export function AccountPage() {
       </PageHeading>
       <Panel title="How you read">
         <Profile />
+      </Panel>
+      <Panel title="How it looks">
+        <ThemeToggle />
       </Panel>
       <Panel title="Your farms">
         <ul>

@@ -30,7 +30,7 @@ export function NextMornings({ mornings }: Pick<Daybreak, 'mornings'>) {
               <span className="text-sm font-semibold">{weekday(date)}</span>
               <VerdictSign state={state} size={30} silent />
               <span className="text-sm">{shortWords[state]}</span>
-              <MiniRibbon {...verdict.ribbon} className="mt-1 w-full" />
+              <MiniRibbon {...verdict.ribbon} className="mt-1 h-8 w-full lg:h-12" />
             </Link>
           </li>
         );

@@ -18,7 +18,7 @@ export function PlanAnswer({ daybreak, verdict }: { daybreak: Daybreak; verdict:
   return (
     <section aria-label={verdict.planName}>
       <div className="flex items-center gap-4">
-        <VerdictSign state={state} size={84} silent />
+        <VerdictSign state={state} size={76} silent />
         <p>
           <span className="answer block">
             {stateWords[state]}
@@ -28,10 +28,11 @@ export function PlanAnswer({ daybreak, verdict }: { daybreak: Daybreak; verdict:
           {state === 'unknown' && <span className="block text-xl font-semibold">not enough to tell</span>}
         </p>
       </div>
-      <p className="mt-3 font-semibold">{verdict.planName}</p>
-      <p>{why(verdict, reader)}</p>
-      {state !== 'unknown' && <p className="text-ink-soft">{minutesText(verdict)}</p>}
-      <p className="mt-2">{step.text}</p>
+      <p className="mt-2 leading-snug">
+        <strong>{verdict.planName}.</strong> {why(verdict, reader)}
+      </p>
+      {state !== 'unknown' && <p className="leading-snug text-ink-soft">{minutesText(verdict)}</p>}
+      <p className="mt-1 leading-snug">{step.text}</p>
       <NextStepLink farmId={farmId} step={step} />
     </section>
   );

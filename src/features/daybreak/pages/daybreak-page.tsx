@@ -2,7 +2,7 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import { ForecastNote, StaleBanner } from '../../../components/forecast-facts.tsx';
 import { EmptyState, PageHeading } from '../../../components/index.ts';
 import { useFarm } from '../../../lib/session/session.ts';
-import { longDate } from '../../../lib/time.ts';
+import { longDate, shortDate, weekday } from '../../../lib/time.ts';
 import { daybreakQuery } from '../api/get-daybreak.ts';
 import { leadOf, NextMornings } from '../components/next-mornings.tsx';
 import { OtherPlans } from '../components/other-plans.tsx';
@@ -29,15 +29,17 @@ export function DaybreakPage() {
   return (
     <>
       {stale && <StaleBanner forecast={forecast} now={now} />}
-      <PageHeading title={name} {...(name === longDate(first.date) ? {} : { over: longDate(first.date) })} />
+      <PageHeading title={name} low>
+        {name !== longDate(first.date) && <p className="over">{`${weekday(first.date)}, ${shortDate(first.date)}`}</p>}
+      </PageHeading>
       <div className="lg:grid lg:grid-cols-[3fr_2fr] lg:gap-12">
         <div>
           <PlanAnswer daybreak={daybreak} verdict={lead} />
           {others.length > 0 && <OtherPlans verdicts={others} />}
         </div>
-        <section aria-label="The mornings after" className="mt-4 lg:mt-0">
+        <section aria-label="The mornings after" className="mt-3 lg:mt-0">
           <NextMornings mornings={rest} />
-          <div className="mt-3">
+          <div className="mt-2">
             <ForecastNote forecast={forecast} stale={stale} now={now} />
           </div>
         </section>

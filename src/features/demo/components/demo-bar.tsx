@@ -2,17 +2,17 @@ import { useQuery } from '@tanstack/react-query';
 import { NavLink } from 'react-router-dom';
 import { useUnits } from '../../../lib/session/session.ts';
 import { paths } from '../../../lib/paths.ts';
-import { dateTime } from '../../../lib/time.ts';
+import { clockTime, dateOf, shortDate } from '../../../lib/time.ts';
 import { demoClockQuery } from '../api/demo.ts';
 import { StepButtons } from './step-buttons.tsx';
 
 const pages: [string, string][] = [
   [paths.demoPhone(), 'Phone'],
-  [paths.demoMailbox(), 'Mailbox'],
+  [paths.demoMailbox(), 'Mail'],
   [paths.demoHooks(), 'Hooks'],
 ];
 
-const look = 'inline-flex min-h-touch items-center px-3 whitespace-nowrap aria-[current=page]:font-bold aria-[current=page]:underline';
+const look = 'inline-flex min-h-touch items-center px-2.5 whitespace-nowrap aria-[current=page]:font-bold aria-[current=page]:underline';
 
 /** The strip over every page of the demo: what time it is there, the next step, and where notices arrive. */
 export function DemoBar() {
@@ -22,13 +22,17 @@ export function DemoBar() {
     <div className="bg-[#1e2440] text-[#fbf7ee]">
       <nav aria-label="Demo" className="mx-auto flex max-w-6xl items-center overflow-x-auto px-1 text-sm md:px-3">
         <NavLink to={paths.demoClock()} className={look} aria-label="Demo clock">
-          {clock ? dateTime(clock.now, { units, timeZone: clock.timeZone }) : 'Demo clock'}
+          {clock ? (
+            <>
+              <span className="hidden md:inline">{shortDate(dateOf(clock.now, clock.timeZone))},&nbsp;</span>
+              {clockTime(clock.now, { units, timeZone: clock.timeZone })}
+            </>
+          ) : (
+            'Clock'
+          )}
         </NavLink>
         {clock && <StepButtons clock={clock} only={1} />}
         <span className="ml-auto flex">
-          <NavLink to={paths.home()} className={look} end>
-            Farm
-          </NavLink>
           {pages.map(([to, name]) => (
             <NavLink key={to} to={to} className={look}>
               {name}

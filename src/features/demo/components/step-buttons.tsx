@@ -16,7 +16,7 @@ export function StepButtons({ clock, only }: { clock: DemoClock; only: number })
       className="min-h-9 rounded-full bg-[#f0b95b] px-3 font-semibold whitespace-nowrap text-[#1e2440] disabled:opacity-60"
       onClick={() => set.mutate(at, { onError: (error) => toast(error.message) })}
     >
-      Step to: {stepWords[name].name.toLowerCase()}
+      <span className="sr-only md:not-sr-only">Step </span>to {stepWords[name].short}
     </button>
   ));
 }

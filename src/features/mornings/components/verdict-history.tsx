@@ -1,16 +1,22 @@
+import { useState } from 'react';
 import type { Morning } from '../../../../shared/api/mornings.ts';
-import { EmptyState } from '../../../components/index.ts';
+import { Button, EmptyState } from '../../../components/index.ts';
 import { useReader } from '../../../lib/session/session.ts';
 import { dateTime } from '../../../lib/time.ts';
 
-/** Each verdict that was told for this morning, newest first. */
+const shownAtFirst = 6;
+
+/** How the answer for this morning changed with each forecast, newest first. */
 export function VerdictHistory({ morning: { history, plans } }: { morning: Morning }) {
   const reader = useReader();
-  if (history.length === 0) return <EmptyState>Nothing was told for this morning yet.</EmptyState>;
+  const [all, setAll] = useState(false);
+  if (history.length === 0) return <EmptyState>The answer has not changed yet.</EmptyState>;
   const nameOf = (planId: string | null): string => plans.find(({ verdict }) => verdict.planId === planId)?.verdict.planName ?? 'A plan since changed';
+  const newestFirst = [...history].sort((a, b) => Date.parse(b.decidedAt) - Date.parse(a.decidedAt));
   return (
-    <ol className="space-y-3">
-      {[...history].reverse().map(({ planId, revision, headline, decidedAt }) => (
+    <>
+      <ol className="space-y-3">
+      {newestFirst.slice(0, all ? undefined : shownAtFirst).map(({ planId, revision, headline, decidedAt }) => (
         <li key={`${planId ?? ''} ${revision}`}>
           <p>{headline[reader.units]}</p>
           <p className="text-sm text-ink-soft">
@@ -18,6 +24,12 @@ export function VerdictHistory({ morning: { history, plans } }: { morning: Morni
           </p>
         </li>
       ))}
-    </ol>
+      </ol>
+      {!all && history.length > shownAtFirst && (
+        <Button variant="link" onClick={() => setAll(true)}>
+          Show all {history.length}
+        </Button>
+      )}
+    </>
   );
 }

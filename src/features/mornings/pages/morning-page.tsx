@@ -41,7 +41,7 @@ export function MorningPage() {
             <ReadingList />
           </QueryPanel>
         </div>
-        <Panel title="What was told, and when">
+        <Panel title="How the answer changed">
           <VerdictHistory morning={morning} />
         </Panel>
       </div>

@@ -34,7 +34,7 @@ function OneInvitation({ done }: { done: () => void }) {
     <RecordForm form={form} saveLabel="Send the invitation">
       <Fields>
         <TextField {...form.bind('email')} label="Their e-mail" type="email" autoComplete="off" required />
-        <ChoiceField {...form.bind('role')} label="Role" choices={roles.map((each) => [each, `${roleWords[each].name}: ${roleWords[each].hint}`])} />
+        <ChoiceField {...form.bind('role')} label="Role" hint={roles.map((each) => `${roleWords[each].name}: ${roleWords[each].hint.toLowerCase()}`).join(' ')} choices={roles.map((each) => [each, roleWords[each].name])} />
       </Fields>
     </RecordForm>
   );

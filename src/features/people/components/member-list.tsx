@@ -1,7 +1,8 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
+import { useState } from 'react';
 import { roles, type Role } from '../../../../shared/rules/authorization.ts';
 import type { Invitation, Member } from '../../../../shared/api/people.ts';
-import { Button, useToast } from '../../../components/index.ts';
+import { Button, Dialog, useToast } from '../../../components/index.ts';
 import { roleWords } from '../../../lib/role-words.ts';
 import { useFarm, useMay, useMe, useReader } from '../../../lib/session/session.ts';
 import { dateTime } from '../../../lib/time.ts';
@@ -30,6 +31,7 @@ function MemberRow({ member }: { member: Member }) {
   const toast = useToast();
   const changeRole = useChangeRole(farmId);
   const remove = useRemovePerson(farmId);
+  const [asking, setAsking] = useState(false);
   const { id, name, email, role, userId } = member;
   const onError = (error: Error) => toast(error.message);
   return (
@@ -55,9 +57,20 @@ function MemberRow({ member }: { member: Member }) {
               </option>
             ))}
           </select>
-          <Button variant="quiet" busy={remove.isPending} onClick={() => remove.mutate(id, { onSuccess: () => toast(`${name} no longer belongs to the farm.`), onError })}>
+          <Button variant="quiet" onClick={() => setAsking(true)}>
             Remove
           </Button>
+          <Dialog open={asking} onClose={() => setAsking(false)} title={`Remove ${name}?`}>
+            <p className="mb-4">They see nothing of the farm from then on, and get no more notices. To have them back, invite them again.</p>
+            <div className="flex gap-2">
+              <Button busy={remove.isPending} onClick={() => remove.mutate(id, { onSuccess: () => toast(`${name} no longer belongs to the farm.`), onError, onSettled: () => setAsking(false) })}>
+                Remove {name}
+              </Button>
+              <Button variant="quiet" onClick={() => setAsking(false)}>
+                Keep
+              </Button>
+            </div>
+          </Dialog>
         </span>
       ) : (
         <span>{roleWords[role].name}</span>

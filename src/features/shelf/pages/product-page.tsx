@@ -3,7 +3,7 @@ import { Panel } from '../../../components/index.ts';
 import { Facts } from '../../../components/records/facts.tsx';
 import { RecordPage } from '../../../components/records/record-page.tsx';
 import { paths } from '../../../lib/paths.ts';
-import { quantityText, type Quantity } from '../../../lib/quantities.ts';
+import { quantityText, rangeText, type Quantity } from '../../../lib/quantities.ts';
 import { rateUnitWords } from '../../../lib/rate-words.ts';
 import { useFarm, useMay, useUnits } from '../../../lib/session/session.ts';
 import { productsApi } from '../api/products.ts';
@@ -18,7 +18,7 @@ export function ProductPage() {
   const product = productsApi.useOne(farmId, id);
   const archive = productsApi.useArchive(farmId);
   const q = (value: number | null, quantity: Quantity) => quantityText(value, quantity, units);
-  const range = (low: number | null, high: number | null, quantity: Quantity) => (low === null && high === null ? '' : low === null ? `at most ${q(high, quantity)}` : high === null ? `at least ${q(low, quantity)}` : `${q(low, quantity)} to ${q(high, quantity)}`);
+  const range = (low: number | null, high: number | null, quantity: Quantity) => rangeText(low, high, quantity, units);
 
   return (
     <RecordPage

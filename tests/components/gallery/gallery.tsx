@@ -1,0 +1,28 @@
+import { StrictMode, type ComponentType } from 'react';
+import { createRoot } from 'react-dom/client';
+import { BrowserRouter, useSearchParams } from 'react-router-dom';
+import '../../../src/app/styles.css';
+import { ToastProvider } from '../../../src/components/index.ts';
+import { applyTheme } from '../../../src/lib/theme.ts';
+import { RibbonPart } from './ribbon-part.tsx';
+import { SignPart } from './sign-part.tsx';
+
+/** What the gallery shows, by the `part` of its address. */
+const parts: Record<string, ComponentType> = { signs: SignPart, ribbon: RibbonPart };
+
+function Gallery() {
+  const [search] = useSearchParams();
+  const Part = parts[search.get('part') ?? ''];
+  return <main className="mx-auto max-w-6xl px-4 py-6">{Part ? <Part /> : <p>There is no such part.</p>}</main>;
+}
+
+applyTheme();
+createRoot(document.getElementById('root')!).render(
+  <StrictMode>
+    <BrowserRouter>
+      <ToastProvider>
+        <Gallery />
+      </ToastProvider>
+    </BrowserRouter>
+  </StrictMode>,
+);
