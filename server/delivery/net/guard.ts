@@ -28,8 +28,9 @@ export interface Guard {
 /**
  * @param permittedHosts names that skip the check: test targets only
  * @param resolve gives all addresses of a name; the system's resolver when left out
+ * @param ca certificate (PEM) to trust instead of the usual ones: of a local test target
  */
-export function createGuard(permittedHosts: readonly string[], resolve: Resolve = resolveBySystem): Guard {
+export function createGuard(permittedHosts: readonly string[], resolve: Resolve = resolveBySystem, ca?: string): Guard {
   const permitted = new Set(permittedHosts.map((host) => host.toLowerCase()));
 
   /** The addresses of a name, all of them public; one that is not refuses them all. */
@@ -63,7 +64,7 @@ export function createGuard(permittedHosts: readonly string[], resolve: Resolve 
       (error: Error) => callback(error, '', 4),
     );
   };
-  const agent = new Agent({ connect: { lookup, timeout: 10_000 }, connections: 64, keepAliveTimeout: 30_000, maxRedirections: 0 });
+  const agent = new Agent({ connect: { lookup, timeout: 10_000, ...(ca ? { ca } : {}) }, connections: 64, keepAliveTimeout: 30_000, maxRedirections: 0 });
 
   return {
     async check(text) {
