@@ -17,6 +17,8 @@ export const themes = {
     needle: '#2f5d50',
     'needle-deep': '#234a3f',
     'needle-on': '#fffdf8',
+    'sky-ink': '#1e2440',
+    'sky-light': '#fffdf8',
   },
   dark: {
     night: '#0e1226',
@@ -35,6 +37,8 @@ export const themes = {
     needle: '#93cbb8',
     'needle-deep': '#b4ddcf',
     'needle-on': '#10142a',
+    'sky-ink': '#1e2440',
+    'sky-light': '#fffdf8',
   },
 } as const;
 

@@ -8,7 +8,7 @@ export function ForecastNote({ forecast, stale, now }: { forecast: ForecastFacts
   return (
     <div className="text-sm text-ink-soft">
       <p>
-        Forecast: {providerName}, {issuedAt ? `made ${span(minutesBetween(issuedAt, now))} ago, ` : ''}fetched {span(minutesBetween(fetchedAt, now))} ago. {attribution}
+        Forecast by {providerName}, {span(minutesBetween(issuedAt ?? fetchedAt, now))} old. {attribution}.
       </p>
       {standInBecause && <p>It stands in for the farm’s first provider: {standInBecause}</p>}
       {stale && <span className="sr-only">This forecast is too old to say go.</span>}

@@ -24,8 +24,8 @@ export function why(verdict: PlanVerdict, { units, timeZone }: Reader): string {
   return verdict.headline[units];
 }
 
-/** `Open 45 min; the job needs 31, and 10 to spare.` */
+/** `45 min open; 31 needed, and 10 spare.` */
 export function minutesText({ window, minutesNeeded, reserveMinutes }: Pick<PlanVerdict, 'window' | 'minutesNeeded' | 'reserveMinutes'>): string {
-  const open = window ? `Open ${Math.round(window.minutes)} min` : 'Open no minute';
-  return `${open}; the job needs ${minutesNeeded}${reserveMinutes > 0 ? `, and ${reserveMinutes} to spare` : ''}.`;
+  const open = window ? `${Math.round(window.minutes)} min open` : 'No minute open';
+  return `${open}; ${minutesNeeded} needed${reserveMinutes > 0 ? `, and ${reserveMinutes} spare` : ''}.`;
 }

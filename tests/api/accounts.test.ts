@@ -53,7 +53,7 @@ describe('opening an account', () => {
     expect(await lettersTo(app, 'again@example.org')).toHaveLength(2);
   });
 
-  it('keeps no token that a reader of the database could use', async () => {
+  it('keeps only a hash of the token it sends', async () => {
     await signUp('hidden@example.org').expect(202);
     const [letter] = await lettersTo(app, 'hidden@example.org');
     const kept = (await app.services.models.oneTimeTokens.findAll()).map((row) => row.tokenHash);

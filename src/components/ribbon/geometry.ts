@@ -70,16 +70,64 @@ export function ribbonPath(lane: Lane, at: (index: number) => number, most: numb
     .join('');
 }
 
-/** Straight threads for the stretches of one kind: thin where the ribbon is shut, dotted where nothing is known. */
-export const threadPath = (lane: Lane, kind: 'closed' | 'untold', at: (index: number) => number): string =>
+/** Thin threads where the ribbon is shut. */
+export const threadPath = (lane: Lane, at: (index: number) => number): string =>
   lane.stretches
-    .filter((stretch) => stretch.kind === kind)
-    .map(({ from, to }) => `M${at(from - 0.5).toFixed(1)} 0H${at(to + 0.5).toFixed(1)}`)
+    .filter(({ kind }) => kind === 'closed')
+    .map(({ from, to }) => `M${at(from === 0 ? 0 : from - 0.5).toFixed(1)} 0H${at(to === lane.headroom.length - 1 ? to : to + 0.5).toFixed(1)}`)
     .join('');
 
-/** Keeps, of places in order, those that stand at least `room` apart: labels that would collide are left out. */
-export function spaced(places: readonly number[], room: number): number[] {
-  const kept: number[] = [];
-  for (const place of places) if (kept.length === 0 || place - kept.at(-1)! >= room) kept.push(place);
-  return kept;
+/** Where a knot is tied, half a step before the first step that is shut. */
+export const knotPlace = (knot: number, at: (index: number) => number): number => at(knot === 0 ? 0 : knot - 0.5);
+
+/** Middles of the open rings that mark a stretch of which nothing can be told. */
+export const ringPlaces = (lane: Lane, at: (index: number) => number, gap: number): number[] =>
+  lane.stretches
+    .filter(({ kind }) => kind === 'untold')
+    .flatMap(({ from, to }) => {
+      const [begin, end] = [at(from - (from === 0 ? 0 : 0.5)), at(to + (to === lane.headroom.length - 1 ? 0 : 0.5))];
+      const count = Math.max(1, Math.floor((end - begin) / gap));
+      return Array.from({ length: count }, (_, index) => begin + ((index + 0.5) / count) * (end - begin));
+    });
+
+export interface LabelWish {
+  /** Place of the knot along the lane. */
+  at: number;
+  /** End of the shut stretch behind the knot. */
+  until: number;
+  /** Room the label takes. */
+  width: number;
 }
+
+export interface PlacedLabel {
+  /** Which wish it fulfils. */
+  index: number;
+  at: number;
+  anchor: 'start' | 'end';
+}
+
+/** Clear of the knot itself. */
+const labelGap = 9;
+
+/**
+ * Places the labels of a lane's knots so that none stands on another or leaves the lane: behind the knot, along the thread,
+ * where there is room; else before it; else nowhere (the list of knots still names it).
+ */
+export function placeLabels(wishes: readonly LabelWish[], lane: { from: number; to: number }): PlacedLabel[] {
+  const placed: PlacedLabel[] = [];
+  let taken = lane.from;
+  wishes.forEach(({ at, until, width }, index) => {
+    const nextKnot = wishes[index + 1]?.at ?? lane.to;
+    if (at + labelGap + width <= Math.min(until, nextKnot, lane.to)) {
+      placed.push({ index, at: at + labelGap, anchor: 'start' });
+      taken = at + labelGap + width;
+    } else if (at - labelGap - width >= taken) {
+      placed.push({ index, at: at - labelGap, anchor: 'end' });
+      taken = at;
+    }
+  });
+  return placed;
+}
+
+/** Room that a text takes, near enough for keeping labels apart. @param sizePx size of its letters */
+export const textRoom = (text: string, sizePx: number): number => text.length * sizePx * 0.54;

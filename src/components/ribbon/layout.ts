@@ -1,7 +1,6 @@
-/** Where everything of a ribbon stands, in drawing units. Time runs right on a wide screen and down on a phone. */
+/** Where everything of a ribbon stands, in pixels. Time runs right on a wide screen and down on a phone. */
 export interface Layout {
   upright: boolean;
-  viewBox: string;
   width: number;
   height: number;
   /** Distance along time of a step. */
@@ -19,49 +18,93 @@ export interface Layout {
   lanesTo: number;
   skyFrom: number;
   skyThickness: number;
+  /** Across time, beside the lanes: where the job is laid. */
+  jobAt: number;
+  /** Moves the time cursor, whose sun hangs in the middle of the sky. */
   cursor(index: number): string;
   cursorPath: string;
-  cursorGrip: { cx: number; cy: number };
-  indexAt(shareX: number, shareY: number): number;
+  cursorSun: { cx: number; cy: number };
+  /** The part that drags without scrolling the page: at least a thumb wide. */
+  rail: { x: number; y: number; width: number; height: number };
+  /** The step nearest to a place in the drawing. */
+  indexAt(x: number, y: number): number;
 }
 
-const wide = { width: 660, gutter: 112, end: 14, axis: 24, sky: 26, lane: 40, job: 36 };
-const tall = { width: 360, gutter: 46, end: 8, head: 118, sky: 22, step: 7.4, foot: 12 };
+const wide = { gutter: 118, end: 18, axis: 22, sky: 30, gap: 8, lane: 38, job: 46 };
+const tall = { gutter: 48, sky: 26, gap: 8, end: 26, head: 106, step: 6.4, foot: 12 };
 
-export function layoutOf({ steps, lanes, upright }: { steps: number; lanes: number; upright: boolean }): Layout {
+interface LayoutOptions {
+  steps: number;
+  lanes: number;
+  upright: boolean;
+  widthPx: number;
+}
+
+/** Lays a ribbon out for the room it has. */
+export const layoutOf = (options: LayoutOptions): Layout => (options.upright ? uprightLayout(options) : levelLayout(options));
+
+const nearest = (share: number, last: number): number => Math.max(0, Math.min(last, Math.round(share * last)));
+
+function levelLayout({ steps, lanes, widthPx: width }: LayoutOptions): Layout {
   const last = Math.max(1, steps - 1);
-  const clamp = (index: number): number => Math.max(0, Math.min(last, Math.round(index)));
-  if (!upright) {
-    const timeFrom = wide.gutter;
-    const timeTo = wide.width - wide.end;
-    const skyFrom = wide.axis;
-    const lanesFrom = wide.axis + wide.sky + 8;
-    const lanesTo = lanesFrom + lanes * wide.lane;
-    const height = lanesTo + wide.job;
-    const at = (index: number): number => timeFrom + (index / last) * (timeTo - timeFrom);
-    const across = (index: number): number => lanesFrom + (index + 0.5) * wide.lane;
-    return {
-      upright, width: wide.width, height, viewBox: `0 0 ${wide.width} ${height}`, at, halfMost: wide.lane / 2 - 5, across, lane: (index) => `translate(0 ${across(index)})`,
-      timeFrom, timeTo, lanesFrom, lanesTo, skyFrom, skyThickness: wide.sky,
-      cursor: (index) => `translate(${at(index).toFixed(1)} 0)`, cursorPath: `M0 ${skyFrom}V${lanesTo + 6}`, cursorGrip: { cx: 0, cy: lanesTo + 10 },
-      indexAt: (shareX) => clamp(((shareX * wide.width - timeFrom) / (timeTo - timeFrom)) * last),
-    };
-  }
-  const timeFrom = tall.head;
-  const timeTo = timeFrom + last * tall.step;
-  const height = timeTo + tall.foot;
+  const [timeFrom, timeTo] = [wide.gutter, width - wide.end];
+  const skyFrom = wide.axis;
+  const lanesFrom = skyFrom + wide.sky + wide.gap;
+  const lanesTo = lanesFrom + lanes * wide.lane;
+  const at = (index: number): number => timeFrom + (index / last) * (timeTo - timeFrom);
+  const across = (index: number): number => lanesFrom + (index + 0.5) * wide.lane;
+  return {
+    upright: false,
+    width,
+    height: lanesTo + wide.job,
+    at,
+    halfMost: wide.lane / 2 - 6,
+    across,
+    lane: (index) => `translate(0 ${across(index)})`,
+    timeFrom,
+    timeTo,
+    lanesFrom,
+    lanesTo,
+    skyFrom,
+    skyThickness: wide.sky,
+    jobAt: lanesTo + 8,
+    cursor: (index) => `translate(${at(index).toFixed(1)} 0)`,
+    cursorPath: `M0 ${skyFrom + wide.sky / 2}V${lanesTo + 20}`,
+    cursorSun: { cx: 0, cy: skyFrom + wide.sky / 2 },
+    rail: { x: timeFrom - 12, y: 0, width: timeTo - timeFrom + 24, height: lanesFrom },
+    indexAt: (x) => nearest((x - timeFrom) / (timeTo - timeFrom), last),
+  };
+}
+
+function uprightLayout({ steps, lanes, widthPx: width }: LayoutOptions): Layout {
+  const last = Math.max(1, steps - 1);
+  const [timeFrom, timeTo] = [tall.head, tall.head + last * tall.step];
   const skyFrom = tall.gutter;
-  const lanesFrom = tall.gutter + tall.sky + 6;
-  const lanesTo = tall.width - tall.end - 16;
+  const lanesFrom = skyFrom + tall.sky + tall.gap;
+  const lanesTo = width - tall.end;
   const room = (lanesTo - lanesFrom) / Math.max(1, lanes);
   const at = (index: number): number => timeFrom + (index / last) * (timeTo - timeFrom);
   const across = (index: number): number => lanesFrom + (index + 0.5) * room;
   return {
-    upright, width: tall.width, height, viewBox: `0 0 ${tall.width} ${height}`, at, halfMost: Math.min(24, room / 2 - 2.5), across,
+    upright: true,
+    width,
+    height: timeTo + tall.foot,
+    at,
+    halfMost: Math.min(24, room / 2 - 2.5),
+    across,
     // Along x becomes down: the drawing is mirrored about the diagonal.
     lane: (index) => `matrix(0 1 1 0 ${across(index)} 0)`,
-    timeFrom, timeTo, lanesFrom, lanesTo, skyFrom, skyThickness: tall.sky,
-    cursor: (index) => `translate(0 ${at(index).toFixed(1)})`, cursorPath: `M${skyFrom} 0H${lanesTo + 4}`, cursorGrip: { cx: lanesTo + 10, cy: 0 },
-    indexAt: (_shareX, shareY) => clamp(((shareY * height - timeFrom) / (timeTo - timeFrom)) * last),
+    timeFrom,
+    timeTo,
+    lanesFrom,
+    lanesTo,
+    skyFrom,
+    skyThickness: tall.sky,
+    jobAt: lanesTo + 6,
+    cursor: (index) => `translate(0 ${at(index).toFixed(1)})`,
+    cursorPath: `M${skyFrom + tall.sky / 2} 0H${width}`,
+    cursorSun: { cx: skyFrom + tall.sky / 2, cy: 0 },
+    rail: { x: 0, y: timeFrom - 24, width: lanesFrom, height: timeTo - timeFrom + 36 },
+    indexAt: (_x, y) => nearest((y - timeFrom) / (timeTo - timeFrom), last),
   };
 }

@@ -1,36 +1,12 @@
-import type { LimitAtStep, LimitName } from '../../../shared/assessment/answer.ts';
+import type { AssessmentAnswer, AssessmentStep, LimitAtStep, LimitName } from '../../../shared/assessment/answer.ts';
+import { limitNames } from '../../../shared/assessment/limit-names.ts';
 import type { UnitSystem } from '../../../shared/units/units.ts';
+import type { Say } from '../../lib/messages/use-t.ts';
 import { unitsOf, type Quantity } from '../../lib/quantities.ts';
-
-/** Name of each limit where there is room for two words. */
-export const limitWord: Record<LimitName, string> = {
-  wind: 'Wind',
-  gusts: 'Gusts',
-  stillAir: 'Still air',
-  inversion: 'Inversion',
-  rainFree: 'Rain-free',
-  wetFoliage: 'Wet leaves',
-  pollinators: 'Bees',
-  temperature: 'Temperature',
-  deltaT: 'Delta T',
-  towardSensitivePlace: 'Toward a place',
-};
-
-/** The key: one sentence per limit. */
-export const limitSentence: Record<LimitName, string> = {
-  wind: 'Thick while the wind at the height the label means is well under its greatest.',
-  gusts: 'Thick while gusts stay well under their greatest.',
-  stillAir: 'Thick while the air moves enough: dead calm is inversion air.',
-  inversion: 'Thick while a night inversion is unlikely; shut while droplets would hang and travel.',
-  rainFree: 'Thick while enough dry hours follow.',
-  wetFoliage: 'Thick once the leaves are dry.',
-  pollinators: 'Thick before bees fly; shut when they may be foraging.',
-  temperature: 'Thick well inside the temperatures allowed.',
-  deltaT: 'Thick while droplets neither dry up nor hang too long.',
-  towardSensitivePlace: 'Thick while the wind does not carry toward a place to be kept clear.',
-};
+import { clockTime, type Reader } from '../../lib/time.ts';
 
 const percent = (share: number): string => `${Math.round(share * 100)} %`;
+const hoursOfADay = 24;
 
 /** To the digit that can be felt: a tenth for wind, a whole degree Fahrenheit or half a degree Celsius. */
 function rounded(value: number, quantity: Quantity, units: UnitSystem): string {
@@ -41,8 +17,8 @@ function rounded(value: number, quantity: Quantity, units: UnitSystem): string {
 }
 
 /** A value with its unit, as one reads it at the time cursor. */
-export function valueText(limit: LimitName, value: number | null, units: UnitSystem): string {
-  if (value === null) return 'not known';
+export function valueText(limit: LimitName, value: number | null, units: UnitSystem, t: Say): string {
+  if (value === null) return t('value.unknown');
   switch (limit) {
     case 'wind':
     case 'gusts':
@@ -53,7 +29,7 @@ export function valueText(limit: LimitName, value: number | null, units: UnitSys
     case 'deltaT':
       return rounded(value, 'temperatureSpan', units);
     case 'rainFree':
-      return `${value >= 24 ? 'over 24' : Number(value.toFixed(1))} dry h`;
+      return t('value.dryHours', { hours: value >= hoursOfADay ? t('value.overDay') : Number(value.toFixed(1)) });
     case 'towardSensitivePlace':
       return `${Math.round(value)}°`;
     case 'inversion':
@@ -63,16 +39,52 @@ export function valueText(limit: LimitName, value: number | null, units: UnitSys
   }
 }
 
+/** At least this much headroom is at ease. */
+const easy = 0.5;
+
 /** How a limit stands at an instant, in a few words: never by colour alone. */
-export function standing(at: LimitAtStep): string {
-  if (at.headroom === null) return 'cannot be told';
-  if (at.headroom < 0) return 'beyond its limit';
-  if (at.headroom === 0) return 'at its limit';
-  return at.headroom >= 0.5 ? 'at ease' : 'close to its limit';
+export function standing({ headroom }: LimitAtStep, t: Say): string {
+  if (headroom === null) return t('standing.untold');
+  if (headroom < 0) return t('standing.beyond');
+  if (headroom === 0) return t('standing.at');
+  return t(headroom >= easy ? 'standing.easy' : 'standing.close');
 }
 
-/** One limit at one instant as a sentence: `Wind 3 mph, limit 10 mph: at ease`. */
-export function limitAtText(limit: LimitName, at: LimitAtStep, units: UnitSystem): string {
-  const against = at.limit === null ? '' : `, limit ${valueText(limit, at.limit, units)}`;
-  return `${limitWord[limit]} ${valueText(limit, at.value, units)}${against}: ${standing(at)}`;
+/** One limit at one instant as a sentence: `Wind 3 mph, limit 10 mph: at ease.` */
+function limitSentence(limit: LimitName, at: LimitAtStep, units: UnitSystem, t: Say): string {
+  const params = { limit: t(`limit.${limit}`), value: valueText(limit, at.value, units, t), bound: valueText(limit, at.limit, units, t), standing: standing(at, t) };
+  return t(at.limit === null ? 'standing.unbounded' : 'standing.sentence', params);
+}
+
+/** The judged limits of a step, the least headroom first; what cannot be told comes before everything. */
+const tightestFirst = ({ limits }: AssessmentStep): [LimitName, LimitAtStep][] =>
+  limitNames
+    .flatMap((limit): [LimitName, LimitAtStep][] => (limits[limit] ? [[limit, limits[limit]]] : []))
+    .sort(([, one], [, two]) => (one.headroom ?? -2) - (two.headroom ?? -2));
+
+/** Whether every hard limit is open at a step; null where one cannot be told and none is shut. */
+export function isOpen({ limits }: AssessmentStep): boolean | null {
+  const hard = Object.values(limits).filter(({ kind }) => kind === 'hard');
+  if (hard.some(({ headroom }) => headroom !== null && headroom < 0)) return false;
+  return hard.some(({ headroom }) => headroom === null) ? null : true;
+}
+
+/** What stands out at a step: whether the window is open, and the tightest hard limit. */
+export function momentText(step: AssessmentStep, units: UnitSystem, t: Say): { state: string; tightest: string } {
+  const open = isOpen(step);
+  const hard = tightestFirst(step).find(([, { kind, headroom }]) => kind === 'hard' && (open === false ? headroom !== null : true));
+  return { state: t(open === null ? 'ribbon.cannotBeTold' : open ? 'ribbon.inWindow' : 'ribbon.outside'), tightest: hard ? limitSentence(hard[0], hard[1], units, t) : '' };
+}
+
+/** What a screen reader says of a moment: whole sentences, the tightest limit first. */
+export function sentenceAt(step: AssessmentStep, reader: Reader, t: Say): string {
+  const { state } = momentText(step, reader.units, t);
+  return [`${clockTime(step.time, reader)}.`, `${state}.`, ...tightestFirst(step).map(([limit, at]) => limitSentence(limit, at, reader.units, t))].join(' ');
+}
+
+/** Why a ribbon is tied shut at a step: `over 10 mph`. */
+export function knotText(limit: LimitName, answer: AssessmentAnswer, knot: number, units: UnitSystem, t: Say): string {
+  const at = answer.steps[knot]?.limits[limit];
+  if (!at || at.limit === null || at.value === null) return t('ribbon.shut');
+  return t(at.value > at.limit ? 'ribbon.over' : 'ribbon.under', { bound: valueText(limit, at.limit, units, t) });
 }

@@ -22,7 +22,7 @@ function stepOfGo({ window, date, planId }: PlanVerdict, now: string, reader: Re
   const open = { kind: 'morning', date, label: 'Look at the morning' } as const;
   if (planId === null) return { text: 'No plan covers it yet; these are the usual limits.', does: { kind: 'plan', label: 'Make a plan' } };
   const { bestStart, latestStart, start, end } = window!;
-  if (dateOf(now, reader.timeZone) !== date) return { text: 'Set things out tonight; the dawn notice looks once more.', does: open };
+  if (dateOf(now, reader.timeZone) !== date) return { text: 'Set things out tonight. Dawn checks again.', does: open };
   if (hasPassed(end, now)) return { text: `The window closed at ${clockTime(end, reader)}.`, does: open };
   if (latestStart && hasPassed(latestStart, now)) return { text: `Too late to start: the job would not end before ${clockTime(end, reader)}.`, does: open };
   const check = { ...open, label: 'Check on site' };

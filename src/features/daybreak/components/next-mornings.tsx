@@ -4,7 +4,7 @@ import { MiniRibbon, VerdictSign } from '../../../components/index.ts';
 import { paths } from '../../../lib/paths.ts';
 import { useFarm, useReader } from '../../../lib/session/session.ts';
 import { longDate, weekday, type Reader } from '../../../lib/time.ts';
-import { stateOf, windowText } from '../../../lib/verdict-text.ts';
+import { stateOf, why, windowText } from '../../../lib/verdict-text.ts';
 
 const words = { go: 'go', hold: 'hold', unknown: 'not enough to tell' } as const;
 const shortWords = { go: 'Go', hold: 'Hold', unknown: '?' } as const;
@@ -19,18 +19,19 @@ export function NextMornings({ mornings }: Pick<Daybreak, 'mornings'>) {
   const { id: farmId } = useFarm();
   const reader = useReader();
   return (
-    <ol className="grid grid-cols-5 gap-1 sm:gap-3">
+    <ol className="grid grid-cols-5 gap-1 sm:gap-3 lg:grid-cols-1 lg:gap-0 lg:divide-y lg:divide-ink/15 lg:border-y lg:border-ink/15">
       {mornings.map(({ date, verdicts }) => {
         const verdict = leadOf(verdicts);
         if (!verdict) return null;
         const state = stateOf(verdict);
         return (
           <li key={date}>
-            <Link to={paths.morning(farmId, date)} aria-label={spoken(verdict, reader)} className="flex flex-col items-center rounded-lg px-1 py-1 hover:bg-paper-sunk">
-              <span className="text-sm font-semibold">{weekday(date)}</span>
+            <Link to={paths.morning(farmId, date)} aria-label={spoken(verdict, reader)} className="flex flex-col items-center rounded-lg px-1 py-1 hover:bg-paper-sunk lg:flex-row lg:gap-4 lg:px-2 lg:py-2">
+              <span className="text-sm font-semibold lg:w-10 lg:text-base">{weekday(date)}</span>
               <VerdictSign state={state} size={30} silent />
-              <span className="text-sm">{shortWords[state]}</span>
-              <MiniRibbon {...verdict.ribbon} className="mt-1 h-8 w-full lg:h-12" />
+              <span className="text-sm lg:hidden">{shortWords[state]}</span>
+              <span className="hidden flex-1 text-sm leading-snug lg:block">{windowText(verdict, reader) || why(verdict, reader)}</span>
+              <MiniRibbon {...verdict.ribbon} className="mt-1 h-8 w-full lg:mt-0 lg:h-10 lg:w-36 lg:shrink-0" />
             </Link>
           </li>
         );

@@ -10,13 +10,13 @@ export function NextStepLink({ farmId, step }: { farmId: string; step: NextStep 
   const { does } = step;
   if (does.kind === 'refresh') {
     return (
-      <Button className="mt-2" busy={refresh.isPending} onClick={() => refresh.mutate(undefined, { onError: (error) => toast(error.message) })}>
+      <Button busy={refresh.isPending} onClick={() => refresh.mutate(undefined, { onError: (error) => toast(error.message) })}>
         {does.label}
       </Button>
     );
   }
   return (
-    <ButtonLink className="mt-2" variant="primary" to={does.kind === 'plan' ? paths.plans.create(farmId) : paths.morning(farmId, does.date)}>
+    <ButtonLink variant="primary" to={does.kind === 'plan' ? paths.plans.create(farmId) : paths.morning(farmId, does.date)}>
       {does.label}
     </ButtonLink>
   );

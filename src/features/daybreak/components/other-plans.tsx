@@ -12,7 +12,7 @@ export function OtherPlans({ verdicts }: { verdicts: PlanVerdict[] }) {
   const { id: farmId } = useFarm();
   const reader = useReader();
   return (
-    <ul className="mt-3 divide-y divide-ink/15 border-y border-ink/15">
+    <ul className="mt-2 divide-y divide-ink/15 border-y border-ink/15">
       {verdicts.map((verdict) => {
         const state = stateOf(verdict);
         return (

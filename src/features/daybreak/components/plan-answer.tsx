@@ -1,6 +1,9 @@
+import { Link } from 'react-router-dom';
 import type { Daybreak, PlanVerdict } from '../../../../shared/api/mornings.ts';
-import { VerdictSign } from '../../../components/index.ts';
+import { MiniRibbon, VerdictSign } from '../../../components/index.ts';
+import { paths } from '../../../lib/paths.ts';
 import { useFarm, useMay, useReader } from '../../../lib/session/session.ts';
+import { longDate } from '../../../lib/time.ts';
 import { minutesText, stateOf, why, windowText } from '../../../lib/verdict-text.ts';
 import { nextStep } from '../next-step.ts';
 import { NextStepLink } from './next-step-link.tsx';
@@ -33,7 +36,12 @@ export function PlanAnswer({ daybreak, verdict }: { daybreak: Daybreak; verdict:
       </p>
       {state !== 'unknown' && <p className="leading-snug text-ink-soft">{minutesText(verdict)}</p>}
       <p className="mt-1 leading-snug">{step.text}</p>
-      <NextStepLink farmId={farmId} step={step} />
+      <div className="mt-2 flex items-center gap-4">
+        <NextStepLink farmId={farmId} step={step} />
+        <Link to={paths.morning(farmId, verdict.date)} aria-label={`The ribbon of ${longDate(verdict.date)}`} className="min-w-0 flex-1">
+          <MiniRibbon {...verdict.ribbon} className="h-12 w-full lg:h-16" />
+        </Link>
+      </div>
     </section>
   );
 }
