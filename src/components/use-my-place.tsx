@@ -30,7 +30,7 @@ export function UseMyPlace({ take }: { take: (position: { latitude: string; long
   }
 
   return (
-    <div>
+    <div className="col-span-full">
       <Button variant="quiet" onClick={ask} busy={state.kind === 'asking'}>
         Use my location
       </Button>

@@ -1,7 +1,7 @@
 import { acresToHa, celsiusSpanToF, celsiusToF, fahrenheitSpanToC, fahrenheitToC, feetToM, gallonsPerAcreToLHa, gallonsToL, hectaresToAcres, inchesToMm, litresPerHaToGallonsPerAcre, litresToGallons, metresToFeet, millimetresToInches, mphToMs, msToMph, type UnitSystem } from '../../shared/units/units.ts';
 
 /** Kinds of number that people read and type in units of their own; all but the last are kept in SI. */
-export type Quantity = 'speed' | 'temperature' | 'temperatureSpan' | 'area' | 'volume' | 'carrier' | 'distance' | 'height' | 'rain' | 'plain';
+export type Quantity = 'speed' | 'temperature' | 'temperatureSpan' | 'area' | 'volume' | 'carrier' | 'distance' | 'height' | 'rain' | 'position' | 'plain';
 
 interface Unit {
   /** As written beside the number. */
@@ -14,6 +14,7 @@ interface Unit {
 
 const same = (value: number): number => value;
 const plain: Unit = { name: '', fromSi: same, toSi: same };
+const degrees: Unit = { name: '°', decimals: 5, fromSi: same, toSi: same };
 const si = (name: string): Unit => ({ name, fromSi: same, toSi: same });
 
 /** The unit of each quantity for each choice of units. */
@@ -27,6 +28,8 @@ export const unitsOf: Record<Quantity, Record<UnitSystem, Unit>> = {
   distance: { us: { name: 'ft', fromSi: metresToFeet, toSi: feetToM }, metric: si('m') },
   height: { us: { name: 'ft', fromSi: metresToFeet, toSi: feetToM }, metric: si('m') },
   rain: { us: { name: 'in', decimals: 3, fromSi: millimetresToInches, toSi: inchesToMm }, metric: si('mm') },
+  /** Degrees of latitude or longitude; five decimals are about a metre. */
+  position: { us: degrees, metric: degrees },
   plain: { us: plain, metric: plain },
 };
 

@@ -14,7 +14,7 @@ import { createAssessor } from '../../server/verdicts/create-assessor.ts';
 import { providerSource } from '../../server/verdicts/provider-source.ts';
 import type { demoEndpoints } from '../../shared/api/system.ts';
 import type { AnswerOf } from '../../shared/api/endpoint.ts';
-import { createTestServices, origin } from '../support/app.ts';
+import { createTestApp, createTestServices, origin } from '../support/app.ts';
 
 type Answer<Name extends keyof typeof demoEndpoints> = AnswerOf<(typeof demoEndpoints)[Name]>;
 
@@ -105,7 +105,6 @@ describe('the demo, stepped by its clock', () => {
 
 describe('without the demo', () => {
   it('its pages do not exist', async () => {
-    const { createTestApp } = await import('../support/app.ts');
     const app = await createTestApp();
     for (const path of ['/clock', '/phone', '/mailbox', '/hooks']) await app.browser().get(`/api/demo${path}`).expect(404);
     await app.browser().put('/api/demo/mood').send({ provider: 'nws', mood: 'ok' }).expect(404);

@@ -1,5 +1,6 @@
 import supertest from 'supertest';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { loadPushKeys } from '../../server/delivery/push/keys.ts';
 import { signInAs } from '../support/people.ts';
 import { createAlertApp, type AlertApp } from './support/alert-app.ts';
 
@@ -58,7 +59,6 @@ describe('devices', () => {
   });
 
   it('get the same VAPID key from every server on the database, kept sealed', async () => {
-    const { loadPushKeys } = await import('../../server/delivery/push/keys.ts');
     const [one, other] = await Promise.all([loadPushKeys(app.services), loadPushKeys(app.services)]);
     expect(one.current).toEqual(app.parts.pushKeys.current);
     expect(other.current).toEqual(one.current);

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { createScheduler } from '../../server/schedule/scheduler.ts';
 import { nextRefresh } from '../../server/schedule/moments.ts';
+import { buildFarm } from '../support/people.ts';
 import { createAlertApp, type AlertApp } from './support/alert-app.ts';
 
 let app: AlertApp;
@@ -103,7 +104,6 @@ describe('when an assessment fails', () => {
   });
 
   it('other farms get their notices all the same', async () => {
-    const { buildFarm } = await import('../support/people.ts');
     const other = await buildFarm(app, 'Other farm');
     await app.parts.scheduler.tick();
     const assess = app.assessor.assessFarm;

@@ -2,10 +2,14 @@ import { useState, type ReactNode } from 'react';
 import { useNavigate } from 'react-router-dom';
 import type { Change } from '../../lib/api/kept.ts';
 import type { FormPart } from '../../lib/forms/form-part.ts';
-import { PageHeading, useToast } from '../index.ts';
+import type { Resource } from '../../../shared/rules/authorization.ts';
+import { useFarm, useMay } from '../../lib/session/session.ts';
+import { ButtonLink, PageHeading, useToast } from '../index.ts';
 
 interface EditorProps<Item extends { name: string; version: number }, Body> {
   title: string;
+  /** What it is in the table of rights. */
+  resource: Resource;
   /** What is edited; null for a new one. */
   stored: Item | null;
   save: (change: Change<Body>) => Promise<Item>;
@@ -16,9 +20,11 @@ interface EditorProps<Item extends { name: string; version: number }, Body> {
 }
 
 /** The page of a form: saves, says so, and leads on; an edit tells the server which copy it was made from. */
-export function RecordEditor<Item extends { name: string; version: number }, Body>({ title, stored, save, after, cancelTo, children }: EditorProps<Item, Body>) {
+export function RecordEditor<Item extends { name: string; version: number }, Body>({ title, resource, stored, save, after, cancelTo, children }: EditorProps<Item, Body>) {
   const navigate = useNavigate();
   const toast = useToast();
+  const may = useMay();
+  const { role } = useFarm();
   const [opened] = useState(stored);
 
   async function send(body: Body) {
@@ -27,6 +33,15 @@ export function RecordEditor<Item extends { name: string; version: number }, Bod
     await navigate(after(item), { replace: true });
   }
 
+  if (!may(opened ? 'update' : 'create', resource)) {
+    return (
+      <>
+        <PageHeading title={title} />
+        <p className="mb-4">As {role} of this farm you may look but not change this. An owner can give you another role.</p>
+        <ButtonLink to={cancelTo}>Back</ButtonLink>
+      </>
+    );
+  }
   return (
     <>
       <PageHeading title={title} />

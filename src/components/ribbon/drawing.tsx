@@ -28,9 +28,11 @@ export function RibbonDrawing({ answer, lanes, layout, timeZone, minutesNeeded, 
   return (
     <g className="ribbon">
       <clipPath id={litBy}>
-        {windowSpans({ answer, layout, along }).map(({ from, to }) => (
-          <rect key={from} {...place(layout, from, to, 0, layout.upright ? layout.width : layout.height)} />
-        ))}
+        {windowSpans({ answer, layout, along })
+          .filter(({ fits }) => fits)
+          .map(({ from, to }) => (
+            <rect key={from} {...place(layout, from, to, 0, layout.upright ? layout.width : layout.height)} />
+          ))}
       </clipPath>
       <Light answer={answer} layout={layout} along={along} />
       <Sky answer={answer} layout={layout} along={along} reader={reader} />

@@ -108,6 +108,8 @@ export interface PlacedLabel {
 
 /** Clear of the knot itself. */
 const labelGap = 9;
+/** A label may reach over the thin beginning of the next ribbon. */
+const labelOver = 30;
 
 /**
  * Places the labels of a lane's knots so that none stands on another or leaves the lane: behind the knot, along the thread,
@@ -118,7 +120,7 @@ export function placeLabels(wishes: readonly LabelWish[], lane: { from: number; 
   let taken = lane.from;
   wishes.forEach(({ at, until, width }, index) => {
     const nextKnot = wishes[index + 1]?.at ?? lane.to;
-    if (at + labelGap + width <= Math.min(until, nextKnot, lane.to)) {
+    if (at + labelGap + width <= Math.min(until + labelOver, nextKnot, lane.to)) {
       placed.push({ index, at: at + labelGap, anchor: 'start' });
       taken = at + labelGap + width;
     } else if (at - labelGap - width >= taken) {

@@ -31,7 +31,7 @@ const usualWidthPx = 640;
  */
 export function HeadroomRibbon({ answer, timeZone, minutesNeeded, units }: HeadroomRibbonProps) {
   const t = useT();
-  const { steps } = answer;
+  const { steps, windows } = answer;
   const upright = !useMediaQuery('(min-width: 48rem)');
   const [room, widthPx] = useWidth<HTMLDivElement>(usualWidthPx);
   const [onlyBinding, setOnlyBinding] = useState(false);
@@ -43,7 +43,7 @@ export function HeadroomRibbon({ answer, timeZone, minutesNeeded, units }: Headr
   const lanes = useMemo(() => (onlyBinding && binding ? allLanes.filter(({ limit }) => limit === binding) : allLanes), [allLanes, onlyBinding, binding]);
   const layout = useMemo(() => layoutOf({ steps: steps.length, lanes: lanes.length, upright, widthPx }), [steps.length, lanes.length, upright, widthPx]);
   const reader = useMemo(() => ({ units, timeZone }), [units, timeZone]);
-  const sentence = useCallback((index: number) => sentenceAt(steps[index]!, reader, t), [steps, reader, t]);
+  const sentence = useCallback((index: number) => sentenceAt(steps[index]!, windows, reader, t), [steps, windows, reader, t]);
   const showTable = useCallback(() => setAsTable(true), []);
   if (steps.length === 0 || allLanes.length === 0) return <p>{t('ribbon.nothing')}</p>;
 
@@ -64,7 +64,7 @@ export function HeadroomRibbon({ answer, timeZone, minutesNeeded, units }: Headr
       ) : (
         <>
           <div className="ribbon-stage">
-            <RibbonMoment steps={steps} cursor={cursor} reader={reader} />
+            <RibbonMoment steps={steps} windows={windows} cursor={cursor} reader={reader} />
             <div ref={room} className="ribbon-room">
               <Scrubber layout={layout} steps={steps.length} cursor={cursor} label={t('ribbon.cursor')} sentence={sentence} describedBy={help} onTable={showTable}>
                 <StillDrawing answer={answer} lanes={lanes} layout={layout} timeZone={timeZone} minutesNeeded={minutesNeeded} units={units} binding={binding} />

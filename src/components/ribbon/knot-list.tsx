@@ -20,7 +20,7 @@ export function KnotList({ answer, lanes, cursor, reader }: KnotListProps) {
   return (
     <section aria-label={t('ribbon.knots')} className="mt-4">
       <p className="over mb-1">{t('ribbon.knots')}</p>
-      <ol className="grid sm:grid-cols-2 lg:grid-cols-3">
+      <ol className="grid gap-x-8 sm:grid-cols-2">
         {knots.map(({ limit, knot }) => (
           <li key={`${limit}${knot}`} className="border-t border-ink/15">
             <button type="button" className="flex min-h-touch w-full items-center gap-3 text-left hover:bg-paper-sunk" onClick={() => cursor.move(knot)}>

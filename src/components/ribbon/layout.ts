@@ -31,7 +31,7 @@ export interface Layout {
 }
 
 const wide = { gutter: 118, end: 18, axis: 22, sky: 30, gap: 8, lane: 38, job: 46 };
-const tall = { gutter: 48, sky: 26, gap: 8, end: 26, head: 106, step: 6.4, foot: 12 };
+const tall = { gutter: 48, sky: 26, gap: 8, end: 26, head: 106, step: 6.4, foot: 30 };
 
 interface LayoutOptions {
   steps: number;

@@ -15,9 +15,9 @@ interface LightProps {
 export const place = ({ upright }: Layout, from: number, to: number, acrossFrom: number, acrossTo: number) =>
   upright ? { x: acrossFrom, y: from, width: acrossTo - acrossFrom, height: Math.max(0, to - from) } : { x: from, y: acrossFrom, width: Math.max(0, to - from), height: acrossTo - acrossFrom };
 
-/** Extents of the windows along time, in the order of the morning. */
-export const windowSpans = ({ answer, layout, along }: LightProps): { from: number; to: number }[] =>
-  answer.windows.map(({ start, end }) => ({ from: Math.max(layout.timeFrom, along(start)), to: Math.min(layout.timeTo, along(end)) }));
+/** Extents of the windows along time, in the order of the morning, and whether the job fits in. */
+export const windowSpans = ({ answer, layout, along }: LightProps): { from: number; to: number; fits: boolean }[] =>
+  answer.windows.map(({ start, end, bestStart }) => ({ from: Math.max(layout.timeFrom, along(start)), to: Math.min(layout.timeTo, along(end)), fits: bestStart !== null }));
 
 /** A band of light falls from the sky through every place where all hard limits are open. */
 export function Light(props: LightProps) {
@@ -53,11 +53,9 @@ export function Job({ answer, layout, along, minutesNeeded, reader }: LightProps
   return (
     <g>
       <rect {...place(layout, from, to, layout.jobAt, layout.jobAt + barThickness)} rx={barThickness / 2} className="ribbon-job" />
-      {!layout.upright && (
-        <text x={x} y={layout.jobAt + barThickness + 18} className="ribbon-small">
-          {text}
-        </text>
-      )}
+      <text {...(layout.upright ? { x: layout.lanesTo, y: layout.height - 5, textAnchor: 'end' } : { x, y: layout.jobAt + barThickness + 18 })} className="ribbon-small">
+        {text}
+      </text>
     </g>
   );
 }

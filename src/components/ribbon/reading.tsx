@@ -1,5 +1,5 @@
 import { useSyncExternalStore } from 'react';
-import type { AssessmentStep } from '../../../shared/assessment/answer.ts';
+import type { AssessmentStep, SprayWindow } from '../../../shared/assessment/answer.ts';
 import { useT } from '../../lib/messages/use-t.ts';
 import { clockTime, type Reader } from '../../lib/time.ts';
 import type { Cursor } from './cursor.ts';
@@ -18,10 +18,10 @@ function useStep({ steps, cursor }: Pick<ReadingProps, 'steps' | 'cursor'>): Ass
 }
 
 /** The moment under the cursor in big type, and the limit that is tightest there. The slider says the same aloud. */
-export function RibbonMoment(props: ReadingProps) {
+export function RibbonMoment({ windows, ...props }: ReadingProps & { windows: SprayWindow[] }) {
   const t = useT();
   const step = useStep(props);
-  const { state, tightest } = momentText(step, props.reader.units, t);
+  const { state, tightest } = momentText(step, windows, props.reader.units, t);
   return (
     <p className="ribbon-moment" aria-hidden="true">
       <span className="ribbon-clock">{clockTime(step.time, props.reader)}</span>
@@ -45,7 +45,7 @@ export function RibbonReading({ lanes, binding, ...props }: ReadingProps & { lan
           at && (
             <div key={limit} className="ribbon-row">
               <dt className={limit === binding ? 'font-bold' : ''}>{t(`limit.${limit}`)}</dt>
-              <dd className="text-right font-semibold">{valueText(limit, at.value, props.reader.units, t)}</dd>
+              <dd className="text-right font-semibold">{at.value === null ? '—' : valueText(limit, at.value, props.reader.units, t)}</dd>
               <dd className={`text-right text-sm ${at.headroom !== null && at.headroom < 0 ? 'font-bold' : 'text-ink-soft'}`}>{standing(at, t)}</dd>
             </div>
           )

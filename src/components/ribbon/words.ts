@@ -1,6 +1,7 @@
-import type { AssessmentAnswer, AssessmentStep, LimitAtStep, LimitName } from '../../../shared/assessment/answer.ts';
+import type { AssessmentAnswer, AssessmentStep, LimitAtStep, LimitName, SprayWindow } from '../../../shared/assessment/answer.ts';
 import { limitNames } from '../../../shared/assessment/limit-names.ts';
 import type { UnitSystem } from '../../../shared/units/units.ts';
+import type { MessageKey } from '../../lib/messages/en.ts';
 import type { Say } from '../../lib/messages/use-t.ts';
 import { unitsOf, type Quantity } from '../../lib/quantities.ts';
 import { clockTime, type Reader } from '../../lib/time.ts';
@@ -69,22 +70,34 @@ export function isOpen({ limits }: AssessmentStep): boolean | null {
   return hard.some(({ headroom }) => headroom === null) ? null : true;
 }
 
+/** Whether a step lies in a window, in a span too short for the job, in none, or cannot be told. */
+function stateText(step: AssessmentStep, windows: readonly SprayWindow[], t: Say): string {
+  const open = isOpen(step);
+  if (open !== true) return t(open === null ? 'ribbon.cannotBeTold' : 'ribbon.outside');
+  const window = windows.find(({ start, end }) => Date.parse(start) <= Date.parse(step.time) && Date.parse(step.time) <= Date.parse(end));
+  return t(window?.bestStart ? 'ribbon.inWindow' : 'ribbon.tooShort');
+}
+
 /** What stands out at a step: whether the window is open, and the tightest hard limit. */
-export function momentText(step: AssessmentStep, units: UnitSystem, t: Say): { state: string; tightest: string } {
+export function momentText(step: AssessmentStep, windows: readonly SprayWindow[], units: UnitSystem, t: Say): { state: string; tightest: string } {
   const open = isOpen(step);
   const hard = tightestFirst(step).find(([, { kind, headroom }]) => kind === 'hard' && (open === false ? headroom !== null : true));
-  return { state: t(open === null ? 'ribbon.cannotBeTold' : open ? 'ribbon.inWindow' : 'ribbon.outside'), tightest: hard ? limitSentence(hard[0], hard[1], units, t) : '' };
+  return { state: stateText(step, windows, t), tightest: hard ? limitSentence(hard[0], hard[1], units, t) : '' };
 }
 
 /** What a screen reader says of a moment: whole sentences, the tightest limit first. */
-export function sentenceAt(step: AssessmentStep, reader: Reader, t: Say): string {
-  const { state } = momentText(step, reader.units, t);
-  return [`${clockTime(step.time, reader)}.`, `${state}.`, ...tightestFirst(step).map(([limit, at]) => limitSentence(limit, at, reader.units, t))].join(' ');
+export function sentenceAt(step: AssessmentStep, windows: readonly SprayWindow[], reader: Reader, t: Say): string {
+  return [`${clockTime(step.time, reader)}.`, `${stateText(step, windows, t)}.`, ...tightestFirst(step).map(([limit, at]) => limitSentence(limit, at, reader.units, t))].join(' ');
 }
+
+/** Limits whose bound says less than what it means. */
+const plainReasons: Partial<Record<LimitName, MessageKey>> = { pollinators: 'ribbon.beesFly', wetFoliage: 'ribbon.leavesWet', towardSensitivePlace: 'ribbon.carries' };
 
 /** Why a ribbon is tied shut at a step: `over 10 mph`. */
 export function knotText(limit: LimitName, answer: AssessmentAnswer, knot: number, units: UnitSystem, t: Say): string {
   const at = answer.steps[knot]?.limits[limit];
+  const plain = plainReasons[limit];
+  if (plain) return t(plain);
   if (!at || at.limit === null || at.value === null) return t('ribbon.shut');
   return t(at.value > at.limit ? 'ribbon.over' : 'ribbon.under', { bound: valueText(limit, at.limit, units, t) });
 }

@@ -26,12 +26,14 @@ export function NextMornings({ mornings }: Pick<Daybreak, 'mornings'>) {
         const state = stateOf(verdict);
         return (
           <li key={date}>
-            <Link to={paths.morning(farmId, date)} aria-label={spoken(verdict, reader)} className="flex flex-col items-center rounded-lg px-1 py-1 hover:bg-paper-sunk lg:flex-row lg:gap-4 lg:px-2 lg:py-2">
-              <span className="text-sm font-semibold lg:w-10 lg:text-base">{weekday(date)}</span>
-              <VerdictSign state={state} size={30} silent />
+            <Link to={paths.morning(farmId, date)} aria-label={spoken(verdict, reader)} className="grid justify-items-center rounded-lg px-1 py-1 hover:bg-paper-sunk lg:grid-cols-[2.5rem_2.5rem_1fr] lg:items-center lg:justify-items-start lg:gap-x-3 lg:px-2 lg:py-3">
+              <span className="text-sm font-semibold lg:row-span-2 lg:text-base">{weekday(date)}</span>
+              <span className="lg:row-span-2">
+                <VerdictSign state={state} size={30} silent />
+              </span>
               <span className="text-sm lg:hidden">{shortWords[state]}</span>
-              <span className="hidden flex-1 text-sm leading-snug lg:block">{windowText(verdict, reader) || why(verdict, reader)}</span>
-              <MiniRibbon {...verdict.ribbon} className="mt-1 h-8 w-full lg:mt-0 lg:h-10 lg:w-36 lg:shrink-0" />
+              <span className="hidden text-sm leading-snug lg:line-clamp-2">{windowText(verdict, reader) || why(verdict, reader)}</span>
+              <MiniRibbon {...verdict.ribbon} className="mt-1 h-8 w-full lg:col-start-3 lg:h-7" />
             </Link>
           </li>
         );

@@ -9,7 +9,7 @@ import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { exposureWords } from '../words.ts';
 
 type Body = z.infer<typeof farmBody>;
-const numbers = { latitude: 'plain', longitude: 'plain', elevationM: 'height', dawnLeadMinutes: 'plain' } as const;
+const numbers = { latitude: 'position', longitude: 'position', elevationM: 'height', dawnLeadMinutes: 'plain' } as const;
 
 export function FarmForm({ stored, save, cancelTo }: FormPart<Farm, Body> & { stored: Farm }) {
   const form = useTypedForm<Body>({ schema: farmBody, numbers, stored, save });
@@ -17,8 +17,8 @@ export function FarmForm({ stored, save, cancelTo }: FormPart<Farm, Body> & { st
     <RecordForm form={form} cancelTo={cancelTo} saveLabel="Save the farm">
       <Fields legend="Where it is" hint="The forecast, the sun and the time zone follow from the position.">
         <TextField {...form.bind('name')} label="Name" required />
-        <NumberField {...form.bind('latitude')} label="Latitude" unit="°" hint="North is above 0." required />
-        <NumberField {...form.bind('longitude')} label="Longitude" unit="°" hint="West is below 0, with a minus sign." required />
+        <NumberField {...form.bind('latitude')} label="Latitude" hint="North is above 0." required />
+        <NumberField {...form.bind('longitude')} label="Longitude" hint="West is below 0, with a minus sign." required />
         <NumberField {...form.bind('elevationM')} label="Elevation" required />
         <UseMyPlace take={form.fill} />
         <ChoiceField {...form.bind('exposure')} label="How it lies" hint="Valley floors hold cold, still air longer." choices={choices(exposureWords)} />

@@ -9,7 +9,7 @@ export function NewBlockPage() {
   const { id: farmId } = useFarm();
   const save = blocksApi.useSave(farmId, null);
   return (
-    <RecordEditor title="New block" stored={null} save={save.mutateAsync} after={(item) => paths.blocks.one(farmId, item.id)} cancelTo={paths.settings(farmId)}>
+    <RecordEditor resource="block" title="New block" stored={null} save={save.mutateAsync} after={(item) => paths.blocks.one(farmId, item.id)} cancelTo={paths.settings(farmId)}>
       {(part) => <BlockForm {...part} />}
     </RecordEditor>
   );
@@ -22,7 +22,7 @@ export function EditBlockPage() {
   const save = blocksApi.useSave(farmId, id);
   const here = paths.blocks.one(farmId, id);
   return (
-    <RecordEditor title={`Edit ${block.name}`} stored={block} save={save.mutateAsync} after={() => here} cancelTo={here}>
+    <RecordEditor resource="block" title={`Edit ${block.name}`} stored={block} save={save.mutateAsync} after={() => here} cancelTo={here}>
       {(part) => <BlockForm {...part} />}
     </RecordEditor>
   );

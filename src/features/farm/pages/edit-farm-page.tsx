@@ -11,7 +11,7 @@ export function EditFarmPage() {
   const save = useUpdateFarm(farmId);
   const here = paths.settings(farmId);
   return (
-    <RecordEditor title="Edit the farm" stored={farm} save={save.mutateAsync} after={() => here} cancelTo={here}>
+    <RecordEditor resource="farm" title="Edit the farm" stored={farm} save={save.mutateAsync} after={() => here} cancelTo={here}>
       {(part) => <FarmForm {...part} stored={farm} />}
     </RecordEditor>
   );

@@ -9,7 +9,7 @@ export function NewPlacePage() {
   const { id: farmId } = useFarm();
   const save = placesApi.useSave(farmId, null);
   return (
-    <RecordEditor title="New place" stored={null} save={save.mutateAsync} after={(item) => paths.places.one(farmId, item.id)} cancelTo={paths.settings(farmId)}>
+    <RecordEditor resource="sensitivePlace" title="New place" stored={null} save={save.mutateAsync} after={(item) => paths.places.one(farmId, item.id)} cancelTo={paths.settings(farmId)}>
       {(part) => <PlaceForm {...part} />}
     </RecordEditor>
   );
@@ -22,7 +22,7 @@ export function EditPlacePage() {
   const save = placesApi.useSave(farmId, id);
   const here = paths.places.one(farmId, id);
   return (
-    <RecordEditor title={`Edit ${place.name}`} stored={place} save={save.mutateAsync} after={() => here} cancelTo={here}>
+    <RecordEditor resource="sensitivePlace" title={`Edit ${place.name}`} stored={place} save={save.mutateAsync} after={() => here} cancelTo={here}>
       {(part) => <PlaceForm {...part} />}
     </RecordEditor>
   );

@@ -9,7 +9,7 @@ export function NewSprayerPage() {
   const { id: farmId } = useFarm();
   const save = sprayersApi.useSave(farmId, null);
   return (
-    <RecordEditor title="New sprayer" stored={null} save={save.mutateAsync} after={(item) => paths.sprayers.one(farmId, item.id)} cancelTo={paths.settings(farmId)}>
+    <RecordEditor resource="sprayer" title="New sprayer" stored={null} save={save.mutateAsync} after={(item) => paths.sprayers.one(farmId, item.id)} cancelTo={paths.settings(farmId)}>
       {(part) => <SprayerForm {...part} />}
     </RecordEditor>
   );
@@ -22,7 +22,7 @@ export function EditSprayerPage() {
   const save = sprayersApi.useSave(farmId, id);
   const here = paths.sprayers.one(farmId, id);
   return (
-    <RecordEditor title={`Edit ${sprayer.name}`} stored={sprayer} save={save.mutateAsync} after={() => here} cancelTo={here}>
+    <RecordEditor resource="sprayer" title={`Edit ${sprayer.name}`} stored={sprayer} save={save.mutateAsync} after={() => here} cancelTo={here}>
       {(part) => <SprayerForm {...part} />}
     </RecordEditor>
   );

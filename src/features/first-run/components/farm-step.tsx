@@ -9,7 +9,7 @@ import { useCreateFarm } from '../../farm/api/farm.ts';
 
 type Body = z.infer<typeof farmBody>;
 
-const numbers = { latitude: 'plain', longitude: 'plain', elevationM: 'height', dawnLeadMinutes: 'plain' } as const;
+const numbers = { latitude: 'position', longitude: 'position', elevationM: 'height', dawnLeadMinutes: 'plain' } as const;
 
 export function FarmStep({ done }: { done: (farm: Farm) => void }) {
   const me = useMe();
@@ -21,8 +21,8 @@ export function FarmStep({ done }: { done: (farm: Farm) => void }) {
       <Fields hint="The forecast, the sun and the time zone follow from the position.">
         <TextField {...form.bind('name')} label="Name of the farm" required />
         <UseMyPlace take={form.fill} />
-        <NumberField {...form.bind('latitude')} label="Latitude" unit="°" hint="North is above 0." required />
-        <NumberField {...form.bind('longitude')} label="Longitude" unit="°" hint="West is below 0, with a minus sign." required />
+        <NumberField {...form.bind('latitude')} label="Latitude" hint="North is above 0." required />
+        <NumberField {...form.bind('longitude')} label="Longitude" hint="West is below 0, with a minus sign." required />
         <NumberField {...form.bind('elevationM')} label="Elevation" hint="About is good enough." required />
       </Fields>
     </RecordForm>

@@ -21,7 +21,7 @@ export function MixFields({ form, products }: { form: TypedForm<PlanBody>; produ
         const product = products.find(({ id }) => id === chosen[index]?.productId);
         const labelRates = product ? `The label allows ${product.rateMin} to ${product.rateMax} ${rateUnitWords[product.rateUnit]}.` : undefined;
         return (
-          <div key={field.id} className="col-span-full grid gap-x-4 sm:grid-cols-2">
+          <div key={field.id} className="col-span-full grid gap-x-8 gap-y-3 sm:grid-cols-2">
             <ChoiceField {...form.bind(`products.${index}.productId`)} label={`Product ${index + 1}`} choices={[['', 'Choose a product'], ...products.map(({ id, name }): [string, string] => [id, name])]} />
             <NumberField {...form.bind(`products.${index}.rate`)} label={`Rate of product ${index + 1}`} unit={product ? rateUnitWords[product.rateUnit] : ''} hint={labelRates} required />
             {fields.length > 1 && (
@@ -32,11 +32,13 @@ export function MixFields({ form, products }: { form: TypedForm<PlanBody>; produ
           </div>
         );
       })}
-      {allProblem && <p role="alert">{allProblem}</p>}
+      {allProblem && <p className="col-span-full font-semibold text-rose-deep">{allProblem}</p>}
       {fields.length < productsMax && (
-        <Button variant="quiet" onClick={() => append({ productId: '', rate: '' })}>
-          Add a product to the mix
-        </Button>
+        <div className="col-span-full">
+          <Button variant="quiet" onClick={() => append({ productId: '', rate: '' })}>
+            Add a product to the mix
+          </Button>
+        </div>
       )}
     </>
   );

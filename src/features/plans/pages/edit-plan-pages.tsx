@@ -54,7 +54,7 @@ export function NewPlanPage() {
   if (choices.blocks.length === 0 || choices.products.length === 0 || !sprayer) return <Missing farmId={farmId} choices={choices} />;
   const today = daybreak.mornings[0]?.date ?? dateOf(daybreak.now, timeZone);
   return (
-    <RecordEditor title="New plan" stored={null} save={save.mutateAsync} after={(plan) => paths.plans.one(farmId, plan.id)} cancelTo={paths.plans.list(farmId)}>
+    <RecordEditor resource="plan" title="New plan" stored={null} save={save.mutateAsync} after={(plan) => paths.plans.one(farmId, plan.id)} cancelTo={paths.plans.list(farmId)}>
       {(part) => <PlanForm {...part} {...choices} start={emptyPlan(today, later(today, planDays), sprayer.id)} />}
     </RecordEditor>
   );
@@ -68,7 +68,7 @@ export function EditPlanPage() {
   const save = plansApi.useSave(farmId, id);
   const here = paths.plans.one(farmId, id);
   return (
-    <RecordEditor title={`Edit ${plan.name}`} stored={plan} save={save.mutateAsync} after={() => here} cancelTo={here}>
+    <RecordEditor resource="plan" title={`Edit ${plan.name}`} stored={plan} save={save.mutateAsync} after={() => here} cancelTo={here}>
       {(part) => <PlanForm {...part} {...choices} start={plan} />}
     </RecordEditor>
   );

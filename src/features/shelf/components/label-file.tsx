@@ -57,7 +57,7 @@ export function LabelFile({ product, mayChange }: { product: Product; mayChange:
           <label htmlFor={inputId} className="block font-semibold">
             {product.labelFile ? 'Put a newer label in its place' : 'Choose the label'} (PDF, at most 10 MB)
           </label>
-          <input id={inputId} type="file" accept="application/pdf" disabled={upload.isPending} aria-describedby={problem ? `${inputId}-problem` : undefined} className="min-h-touch py-3" onChange={(event) => void take(event.target.files?.[0])} />
+          <input id={inputId} type="file" accept="application/pdf" disabled={upload.isPending} aria-describedby={problem ? `${inputId}-problem` : undefined} className="min-h-touch max-w-full py-2 file:mr-4 file:min-h-touch file:rounded-lg file:border-[1.5px] file:border-ink/25 file:bg-transparent file:px-5" onChange={(event) => void take(event.target.files?.[0])} />
         </p>
       )}
       {upload.isPending && <p role="status">Sending the label…</p>}

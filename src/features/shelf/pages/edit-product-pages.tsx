@@ -9,7 +9,7 @@ export function NewProductPage() {
   const { id: farmId } = useFarm();
   const save = productsApi.useSave(farmId, null);
   return (
-    <RecordEditor title="New product" stored={null} save={save.mutateAsync} after={(item) => paths.shelf.one(farmId, item.id)} cancelTo={paths.shelf.list(farmId)}>
+    <RecordEditor resource="product" title="New product" stored={null} save={save.mutateAsync} after={(item) => paths.shelf.one(farmId, item.id)} cancelTo={paths.shelf.list(farmId)}>
       {(part) => <ProductForm {...part} />}
     </RecordEditor>
   );
@@ -22,7 +22,7 @@ export function EditProductPage() {
   const save = productsApi.useSave(farmId, id);
   const here = paths.shelf.one(farmId, id);
   return (
-    <RecordEditor title={`Edit ${product.name}`} stored={product} save={save.mutateAsync} after={() => here} cancelTo={here}>
+    <RecordEditor resource="product" title={`Edit ${product.name}`} stored={product} save={save.mutateAsync} after={() => here} cancelTo={here}>
       {(part) => <ProductForm {...part} />}
     </RecordEditor>
   );
