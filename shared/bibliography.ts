@@ -51,6 +51,14 @@ export const bibliography = {
   usno2023: { who: 'US Naval Observatory', year: 2023, title: 'Rise and set for the Sun', where: 'table for 36.95 N 112.52 W', standing: 'seen' },
   panofskyDutton1984: { who: 'Panofsky, Dutton', year: 1984, title: 'Atmospheric Turbulence', where: 'gusts come down from above the surface layer', standing: 'memory' },
   windError: { who: 'public benchmark pages; NWS MOS verification', year: 2026, title: 'Mean error of hourly 10 m wind, about 1.5 m/s', where: 'low trust, lead time unstated', standing: 'seen' },
+  nist44: { who: 'NIST', year: 2023, title: 'Handbook 44, appendix C: General tables of units of measurement', where: 'exact sizes of gallon, fluid ounce, pound, acre; also SP 811', standing: 'memory' },
+  ncStateCalibration: { who: 'North Carolina State Extension', year: 2026, title: 'Christmas tree sprayer calibration worksheet', where: 'page of unknown year, read in 2026: 1/128-acre method, trees per acre, dose per tank', standing: 'seen' },
+  mesaCalibration: { who: 'Mesa County Extension, Colorado', year: 2026, title: '1/128-acre calibration, handgun example', where: 'page of unknown year, read in 2026: 150 fl oz in 75 s', standing: 'seen' },
+  albanyCalibration: { who: 'Albany County Extension, Wyoming', year: 2026, title: 'Boom sprayer formula GPA = 5940·GPM/(mph·W)', where: 'page of unknown year, read in 2026: 222 in, 3.75 gal/min, 5 mph give 20', standing: 'seen' },
+  nafexCalibration: { who: 'NAFEX list', year: 2026, title: 'Spray volume from a measured area', where: 'page of unknown year, read in 2026: 1.5 gal on 1000 ft² give 65 gal/ac', standing: 'seen' },
+  omafraMixing: { who: 'OMAFRA (Deveau); RealAgriculture', year: 2026, title: 'Tank-mix order and water pH', where: 'page of unknown year, read in 2026: WALES; captan half-life; not more than about three partners', standing: 'seen' },
+  purduePpp122: { who: 'Whitford et al., Purdue Extension', year: 2018, title: 'Avoid tank mixing errors', where: 'PPP-122: fuller order, jar test', standing: 'memory' },
+  hyndmanFan1996: { who: 'Hyndman, Fan', year: 1996, title: 'Sample quantiles in statistical packages', where: 'Am. Stat. 50:361-365, type 7', standing: 'memory' },
 } as const satisfies Record<string, Source>;
 
 export type SourceKey = keyof typeof bibliography;

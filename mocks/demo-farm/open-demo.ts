@@ -56,11 +56,33 @@ async function equip({ models, settings, clock }: Services, { farmId, userIds }:
   });
 }
 
-/** On the first start: the farm, and the days until the demo opens, lived through by the real server. */
+const filledSetting = 'demoFilled';
+
+/**
+ * On the first start: the farm, and the days until the demo opens, lived through by the real server. What a stop interrupted is
+ * taken up again at the next start; a demo once filled is left alone.
+ */
 export async function fillDemo(opened: OpenedDemo, parts: Pick<Parts, 'pushKeys' | 'scheduler' | 'worker'>): Promise<void> {
   const { services, fakes } = opened;
-  const seeded = await seedDemoFarm(services, demoOpensAt);
+  const { models, log, clock } = services;
+  if (await models.settings.findByPk(filledSetting)) return;
+  const seeded = (await seedDemoFarm(services, demoOpensAt)) ?? (await seededBefore(services));
   if (!seeded) return;
-  await equip(services, seeded, fakes, parts);
-  await stepClock(fakes.clock, parts.scheduler, parts.worker, demoOpensAt);
+  if ((await models.devices.count()) === 0) await equip(services, seeded, fakes, parts);
+  const { level } = log;
+  log.level = 'warn';
+  try {
+    await stepClock(fakes.clock, parts.scheduler, parts.worker, demoOpensAt);
+  } finally {
+    log.level = level;
+  }
+  await models.settings.create({ name: filledSetting, value: true, updatedAt: clock.now() });
+}
+
+/** The demo farm of an earlier, interrupted start. */
+async function seededBefore({ models }: Services): Promise<SeededFarm | null> {
+  const farm = await models.farms.findOne({ where: { name: demoFarm.name } });
+  if (!farm) return null;
+  const users = await models.users.findAll({ where: { email: demoPeople.map(({ email }) => email) } });
+  return { farmId: farm.id, userIds: new Map(users.map(({ id, email }) => [email, id])) };
 }

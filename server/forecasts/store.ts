@@ -1,5 +1,5 @@
 import { randomUUID } from 'node:crypto';
-import type { Transaction } from 'sequelize';
+import { Op, type Transaction } from 'sequelize';
 import type { Models } from '../models/index.ts';
 import type { ForecastRow } from '../models/weather.ts';
 import type { IssuedForecast } from './provider.ts';
@@ -20,9 +20,14 @@ export function refreshDue(forecast: ForecastRow | null, now: Date): boolean {
   return sinceMinutes >= refreshMinutes && (forecast.expiresAt === null || forecast.expiresAt <= now);
 }
 
-/** The farm's newest stored issue, whatever its provider. */
-export async function newestForecast(models: Models, farmId: string, transaction: Transaction | null = null): Promise<ForecastRow | null> {
-  const row = await models.forecasts.findOne({ where: { farmId }, order: [['fetchedAt', 'DESC'], ['id', 'DESC']], transaction });
+/** The middle of a provider's grid cell may lie this far from the farm, degrees; a farm that moved farther needs another forecast. */
+const sameCellDeg = 0.35;
+
+/** The farm's newest stored issue for where it lies now, whatever its provider. */
+export async function newestForecast(models: Models, farm: { id: string; latitude: number; longitude: number }, transaction: Transaction | null = null): Promise<ForecastRow | null> {
+  const near = (middle: number) => ({ [Op.between]: [middle - sameCellDeg, middle + sameCellDeg] });
+  const where = { farmId: farm.id, placeLatitude: near(farm.latitude), placeLongitude: near(farm.longitude) };
+  const row = await models.forecasts.findOne({ where, order: [['fetchedAt', 'DESC'], ['id', 'DESC']], transaction });
   return row ? row.get({ plain: true }) : null;
 }
 

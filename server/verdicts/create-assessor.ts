@@ -70,12 +70,12 @@ export function createAssessor(services: Services, source: ForecastSource): Asse
   async function assessFarm(farmId: string, options: AssessOptions): Promise<Daybreak> {
     const farmRow = await models.farms.findOne({ where: { id: farmId } });
     if (!farmRow) throw notFound();
-    const fetched = await fetchFor(farmRow.get({ plain: true }), await newestForecast(models, farmId), options);
+    const fetched = await fetchFor(farmRow.get({ plain: true }), await newestForecast(models, farmRow), options);
     return inTransaction(sequelize, async (transaction) => {
       // One assessment of a farm at a time: revisions count up without gaps.
       await models.farms.findOne({ where: { id: farmId }, attributes: ['id'], lock: transaction.LOCK.UPDATE, transaction });
       const now = clock.now();
-      const forecast = await keep(farmId, await newestForecast(models, farmId, transaction), fetched, transaction);
+      const forecast = await keep(farmId, await newestForecast(models, farmRow, transaction), fetched, transaction);
       const dates = comingMornings(now, farmRow.timeZone);
       const state = await loadFarmState(models, farmId, dates[0]!, dates.at(-1)!, now, transaction);
       const stale = !forecast || freshUntil(forecast) <= now;
@@ -104,7 +104,7 @@ export function createAssessor(services: Services, source: ForecastSource): Asse
   async function morning(farmId: string, date: string): Promise<Morning> {
     const now = clock.now();
     const state = await loadFarmState(models, farmId, date, date, now);
-    const forecast = await newestForecast(models, farmId);
+    const forecast = await newestForecast(models, state.farm);
     const stale = !forecast || freshUntil(forecast) <= now;
     const told = (await models.verdicts.findAll({ where: { farmId, morning: date }, order: [['decidedAt', 'DESC'], ['revision', 'DESC']], limit: 100 })).map((row) => row.get({ plain: true }));
     const plans = answersOf(state, forecast, date, stale).map(({ judged, answer }) => {

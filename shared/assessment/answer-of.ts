@@ -76,7 +76,7 @@ function stepsOf(judgement: Judgement): AssessmentStep[] {
   for (let step = 0; step < morning.morning.count; step += 1) {
     const limits: AssessmentStep['limits'] = {};
     for (const track of tracks) limits[track.limit] = atStep(track, step);
-    steps.push({ time: times[step]!, sunAltitudeDeg: Math.round(morning.morning.sunAltitudeDeg[step]! * 1e4) / 1e4, limits, inversion: morning.inversion[step]!, pollinators: beesAt(morning, kinds, step) });
+    steps.push({ time: times[step]!, sunAltitudeDeg: Math.round(morning.morning.sunAltitudeDeg[step]! * 1e4) / 1e4, limits, inversion: inversionAt(morning, step), pollinators: beesAt(morning, kinds, step) });
   }
   return steps;
 }
@@ -89,6 +89,12 @@ function atStep(track: Track, step: number): LimitAtStep {
     headroom: Number.isNaN(headroom) ? null : Math.floor(headroom * headroomScale) / headroomScale,
     kind: track.isHard ? 'hard' : 'advice',
   };
+}
+
+/** Copied, so that the answer holds plain values. */
+function inversionAt(morning: PreparedMorning, step: number): AssessmentStep['inversion'] {
+  const { likelihood, stabilityClass, evidence } = morning.inversionAt(step);
+  return { likelihood, stabilityClass, evidence };
 }
 
 function beesAt(morning: PreparedMorning, kinds: readonly BeeKind[], step: number): AssessmentStep['pollinators'] {

@@ -107,16 +107,26 @@ function fill(table: HourTable, at: number, hour: ForecastHour): void {
   else table.gustOfMs[at] = gust;
 }
 
-/** Dew point as given, else from temperature and humidity; unknown where the two disagree. */
-function dewPointOf(table: HourTable, temperatureC: number, dewPointC: number, humidityPct: number): number {
+/** Dew point as given, else from temperature and humidity; the kind of contradiction where the two disagree. */
+function settledDewPoint(temperatureC: number, dewPointC: number, humidityPct: number): number | Contradiction {
   if (Number.isNaN(dewPointC)) return humidityPct > 0 ? dewPointFromHumidityC(temperatureC, humidityPct) : NaN;
-  if (dewPointC > temperatureC + dewPointSlackC) {
-    table.contradictions.add('dewPointAboveTemperature');
-    return NaN;
-  }
-  if (Math.abs(relativeHumidityPct(temperatureC, dewPointC) - humidityPct) > humiditySlackPct) {
-    table.contradictions.add('humidityAgainstDewPoint');
-    return NaN;
-  }
-  return dewPointC;
+  if (dewPointC > temperatureC + dewPointSlackC) return 'dewPointAboveTemperature';
+  return Math.abs(relativeHumidityPct(temperatureC, dewPointC) - humidityPct) > humiditySlackPct ? 'humidityAgainstDewPoint' : dewPointC;
+}
+
+function dewPointOf(table: HourTable, temperatureC: number, dewPointC: number, humidityPct: number): number {
+  const settled = settledDewPoint(temperatureC, dewPointC, humidityPct);
+  if (typeof settled === 'number') return settled;
+  table.contradictions.add(settled);
+  return NaN;
+}
+
+/** The hour with dew point and humidity brought together: each from the other where one is missing, both unknown where they disagree. */
+export function withHumidity(hour: ForecastHour): ForecastHour {
+  const { temperature2mC, dewPoint2mC, relativeHumidityPct: humidityPct } = hour;
+  if (temperature2mC === null) return hour;
+  const settled = settledDewPoint(temperature2mC, known(dewPoint2mC), known(humidityPct));
+  if (typeof settled !== 'number') return { ...hour, dewPoint2mC: null, relativeHumidityPct: null };
+  if (Number.isNaN(settled) || (dewPoint2mC !== null && humidityPct !== null)) return hour;
+  return { ...hour, dewPoint2mC: settled, relativeHumidityPct: humidityPct ?? relativeHumidityPct(temperature2mC, settled) };
 }

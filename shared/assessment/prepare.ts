@@ -6,6 +6,7 @@ import { saturationVapourPressureKpa } from '../atmosphere/saturation-vapour-pre
 import type { StabilityClass } from '../atmosphere/stability-turner.ts';
 import { deltaTC } from '../atmosphere/wet-bulb.ts';
 import type { BeeKind, ForecastHour, Reading, Site } from './case.ts';
+import { cautiousHours, hoursAround } from './cautious-hours.ts';
 import { column } from './columns.ts';
 import { prepareBees, type BeeSteps } from './prepare-bees.ts';
 import { prepareDirection, type DirectionSteps } from './prepare-direction.ts';
@@ -43,7 +44,9 @@ export interface PreparedMorning {
   radiationWm2: Float64Array;
   /** Steps whose radiation was estimated from the sun's altitude and cloud [kastenCzeplak1980]. */
   radiationIsEstimated: boolean;
-  inversion: InversionStep[];
+  /** Inversion at a step as the forecast shows it. */
+  inversionAt(step: number): InversionStep;
+  /** As judged: gaps in the forecast are taken for the weather that makes inversions and wet leaves. */
   inversionLikelihood: Float64Array;
   foliageWetness: Float64Array;
   foliageDriesAt(afterMs: number): number | null;
@@ -79,16 +82,13 @@ function onSteps(morning: Morning, hourly: Float64Array, factor = 1): Float64Arr
  * @throws RangeError for an unknown zone; shapes and ranges are checked by `parseCase` before
  */
 export function prepareMorning(weather: Weather, morning: Morning = morningOf(weather.site, weather.date)): PreparedMorning {
-  const { site, hours } = weather;
+  const { hours } = weather;
   const table = tableOf(hours, morning.firstHourMs, morning.hourCount + hoursAfterNoon);
   const siteFactor = learnSiteWindFactor(hours, weather.readings ?? []);
   const temperatureC = onSteps(morning, table.temperatureC);
   const windMs = onSteps(morning, table.windMs, siteFactor?.factor ?? 1);
   const sky = radiationOnSteps(morning, table);
-  const inversion = onInversionSteps(morning, prepareInversion({ site, hours, sunAltitudeDegAt: morning.sunAltitudeDegAt }));
-  const foliage = prepareFoliage({ site, hours, sunAltitudeDegAt: morning.sunAltitudeDegAt });
-  const foliageWetness = column(morning.count);
-  for (let step = 0; step < morning.count; step += 1) foliageWetness[step] = foliage.at(morning.startMs + step * stepMs).wetness ?? NaN;
+  const night = nightOnSteps(morning, hoursAround(hours, morning.startMs));
   return {
     morning,
     hours: table,
@@ -100,24 +100,39 @@ export function prepareMorning(weather: Weather, morning: Morning = morningOf(we
     deltaTC: deltaTOnSteps(morning, table, temperatureC),
     radiationWm2: sky.radiationWm2,
     radiationIsEstimated: sky.isEstimated,
-    inversion,
-    inversionLikelihood: likelihoodsOf(inversion),
-    foliageWetness,
-    foliageDriesAt: (afterMs) => foliage.driesAt(afterMs),
+    ...night,
     bees: prepareBees(morning, table, { temperatureC, windMs, radiationWm2: sky.radiationWm2, brightestWm2: sky.brightestWm2 }),
   };
 }
 
-function onInversionSteps(morning: Morning, prepared: { at(epochMs: number): InversionStep }): InversionStep[] {
-  const steps = new Array<InversionStep>(morning.count);
-  for (let step = 0; step < morning.count; step += 1) steps[step] = prepared.at(morning.startMs + step * stepMs);
-  return steps;
+type Night = Pick<PreparedMorning, 'inversionAt' | 'inversionLikelihood' | 'foliageWetness' | 'foliageDriesAt'>;
+
+/** Inversion and wet leaves on the steps; where the forecast has gaps the judged values are those of the worst weather in the gaps. */
+function nightOnSteps(morning: Morning, hours: readonly ForecastHour[]): Night {
+  const { site, sunAltitudeDegAt } = morning;
+  const inversion = prepareInversion({ site, hours, sunAltitudeDegAt });
+  const foliage = prepareFoliage({ site, hours, sunAltitudeDegAt });
+  const inversionLikelihood = onTimes(morning, (ms) => inversion.at(ms).likelihood);
+  const foliageWetness = onTimes(morning, (ms) => foliage.at(ms).wetness);
+  const filled = cautiousHours(hours, sunAltitudeDegAt);
+  if (filled) {
+    const worstInversion = prepareInversion({ site, hours: filled, sunAltitudeDegAt });
+    const worstFoliage = prepareFoliage({ site, hours: filled, sunAltitudeDegAt });
+    raise(inversionLikelihood, onTimes(morning, (ms) => worstInversion.at(ms).likelihood));
+    raise(foliageWetness, onTimes(morning, (ms) => worstFoliage.at(ms).wetness));
+  }
+  return { inversionAt: (step) => inversion.at(morning.startMs + step * stepMs), inversionLikelihood, foliageWetness, foliageDriesAt: (afterMs) => foliage.driesAt(afterMs) };
 }
 
-function likelihoodsOf(inversion: readonly InversionStep[]): Float64Array {
-  const likelihoods = column(inversion.length);
-  for (let step = 0; step < inversion.length; step += 1) likelihoods[step] = inversion[step]!.likelihood ?? NaN;
-  return likelihoods;
+function onTimes(morning: Morning, at: (epochMs: number) => number | null): Float64Array {
+  const values = column(morning.count);
+  for (let step = 0; step < morning.count; step += 1) values[step] = at(morning.startMs + step * stepMs) ?? NaN;
+  return values;
+}
+
+/** Raises known values to others; what was unknown stays so. */
+function raise(values: Float64Array, to: Float64Array): void {
+  for (let step = 0; step < values.length; step += 1) if (to[step]! > values[step]!) values[step] = to[step]!;
 }
 
 function gustsOnSteps(morning: Morning, table: HourTable, windMs: Float64Array, siteFactor: SiteWindFactor | null): Float64Array {

@@ -39,13 +39,13 @@ function Frame({ links, place, children }: { links: FrameLink[]; place?: string;
 }
 
 const linksOf = (farmId: string): FrameLink[] => [
-  { to: paths.daybreak(farmId), name: 'Daybreak', end: true },
-  { to: paths.plans.list(farmId), name: 'Plans' },
-  { to: paths.shelf.list(farmId), name: 'Shelf' },
-  { to: paths.settings(farmId), name: 'Farm' },
-  { to: paths.notices(farmId), name: 'Notices' },
-  { to: paths.people(farmId), name: 'People' },
-  { to: paths.account(), name: 'You' },
+  { to: paths.daybreak(farmId), name: 'Daybreak', icon: 'daybreak', end: true },
+  { to: paths.plans.list(farmId), name: 'Plans', icon: 'plan' },
+  { to: paths.shelf.list(farmId), name: 'Shelf', icon: 'shelf' },
+  { to: paths.settings(farmId), name: 'Farm', icon: 'farm' },
+  { to: paths.notices(farmId), name: 'Notices', icon: 'bell' },
+  { to: paths.people(farmId), name: 'People', icon: 'people' },
+  { to: paths.account(), name: 'You', icon: 'person' },
 ];
 
 /** Pages of a farm. */

@@ -1,11 +1,15 @@
 import type { ReactNode } from 'react';
 import { NavLink, useLocation } from 'react-router-dom';
+import { useT } from '../lib/messages/use-t.ts';
+import { Icon, type IconName } from './icon.tsx';
 import { LastWord } from './page.tsx';
 import { VerdictSign } from './verdict-sign.tsx';
 
 export interface FrameLink {
   to: string;
   name: string;
+  /** Stands with the name. */
+  icon?: IconName;
   /** The exact address only. */
   end?: boolean;
 }
@@ -24,21 +28,26 @@ interface AppFrameProps {
 const inBar = 4;
 
 const linkLook = ({ isActive }: { isActive: boolean }): string =>
-  `flex min-h-touch items-center justify-center px-2 text-center text-[0.95rem] md:justify-start md:rounded-lg md:px-3 ${isActive ? 'font-bold underline decoration-[3px] decoration-straw underline-offset-8' : 'text-ink-soft hover:text-ink'}`;
+  `frame-link ${isActive ? 'active font-bold' : 'text-ink-soft hover:text-ink'}`;
 
-const PageLink = ({ to, name, end }: FrameLink) => (
+const PageLink = ({ to, name, icon, end }: FrameLink) => (
   <NavLink to={to} end={end ?? false} className={linkLook}>
-    {name}
+    {icon && <Icon name={icon} />}
+    <span className="frame-name">{name}</span>
   </NavLink>
 );
 
 /** Links that find no room in a phone's bar; it closes when one has arrived. */
 function MoreLinks({ links }: { links: FrameLink[] }) {
+  const t = useT();
   const { pathname } = useLocation();
   return (
     <details key={pathname} className="relative">
-      <summary className="flex min-h-touch list-none items-center px-2 text-[0.95rem] text-ink-soft">More</summary>
-      <ul className="absolute right-0 bottom-14 min-w-40 rounded-lg border border-ink/15 bg-paper-raised p-2 shadow-lg">
+      <summary className="frame-link list-none text-ink-soft [&::-webkit-details-marker]:hidden">
+        <Icon name="more" />
+        <span className="frame-name">{t('frame.more')}</span>
+      </summary>
+      <ul className="frame-more">
         {links.map((link) => (
           <li key={link.to}>
             <PageLink {...link} />
@@ -51,20 +60,21 @@ function MoreLinks({ links }: { links: FrameLink[] }) {
 
 /** The frame of every page: links in a bar under the thumb on a phone, at the side on a wide screen. */
 export function AppFrame({ links, place, strip, children }: AppFrameProps) {
+  const t = useT();
   return (
     <>
       <a href="#main" className="sr-only focus:not-sr-only focus:fixed focus:top-2 focus:left-2 focus:z-30 focus:bg-paper-raised focus:p-3">
-        To the content
+        {t('frame.skip')}
       </a>
       {strip}
       <div className="mx-auto max-w-6xl md:grid md:grid-cols-[12rem_1fr] md:gap-10 md:px-6">
         {links.length > 0 && (
-          <nav aria-label="Pages" className="fixed inset-x-0 bottom-0 z-10 border-t border-ink/15 bg-paper-raised pb-[env(safe-area-inset-bottom)] md:sticky md:top-6 md:self-start md:border-0 md:bg-transparent md:pt-8">
+          <nav aria-label={t('frame.pages')} className="fixed inset-x-0 bottom-0 z-10 border-t border-ink/15 bg-paper-raised pb-[env(safe-area-inset-bottom)] md:sticky md:top-6 md:self-start md:border-0 md:bg-transparent md:pt-8">
             <p className="mb-4 hidden items-center gap-2 font-bold md:flex">
               <VerdictSign state="go" size={32} silent />
               {place ?? 'Dawnvane'}
             </p>
-            <ul className="flex justify-around md:block">
+            <ul className="grid grid-flow-col auto-cols-fr md:block">
               {links.map((link, index) => (
                 <li key={link.to} className={index >= inBar ? 'hidden md:block' : ''}>
                   <PageLink {...link} />

@@ -1,5 +1,6 @@
 import type { ButtonHTMLAttributes, ReactNode } from 'react';
 import { Link, type LinkProps } from 'react-router-dom';
+import { Icon, type IconName } from './icon.tsx';
 
 export type ButtonVariant = 'primary' | 'quiet' | 'link';
 
@@ -24,6 +25,19 @@ export function Button({ variant = 'primary', busy = false, type = 'button', cla
     </button>
   );
 }
+
+interface IconButtonProps extends Omit<ButtonHTMLAttributes<HTMLButtonElement>, 'children'> {
+  icon: IconName;
+  /** What it does, for those who do not see the drawing. */
+  label: string;
+}
+
+/** A drawing to press; its name is read aloud and shown when one rests on it. */
+export const IconButton = ({ icon, label, type = 'button', className = '', ...rest }: IconButtonProps) => (
+  <button type={type} aria-label={label} title={label} className={`inline-flex size-12 items-center justify-center rounded-lg hover:bg-paper-sunk ${className}`} {...rest}>
+    <Icon name={icon} />
+  </button>
+);
 
 interface ButtonLinkProps extends LinkProps {
   variant?: ButtonVariant;

@@ -1,4 +1,6 @@
 import { useEffect, useId, useRef, type ReactNode } from 'react';
+import { useT } from '../lib/messages/use-t.ts';
+import { IconButton } from './button.tsx';
 
 interface DialogProps {
   open: boolean;
@@ -10,6 +12,7 @@ interface DialogProps {
 /** The browser's own dialog: holds the focus, closes on Escape, and gives the focus back. */
 export function Dialog({ open, onClose, title, children }: DialogProps) {
   const dialog = useRef<HTMLDialogElement>(null);
+  const t = useT();
   const id = useId();
   useEffect(() => {
     if (open && !dialog.current?.open) dialog.current?.showModal();
@@ -17,9 +20,10 @@ export function Dialog({ open, onClose, title, children }: DialogProps) {
   }, [open]);
   return (
     <dialog ref={dialog} aria-labelledby={id} onClose={onClose} className="m-auto w-[min(36rem,calc(100%-2rem))] rounded-xl bg-paper-raised p-6 text-ink backdrop:bg-night/60">
-      <h2 id={id} className="mb-4">
-        {title}
-      </h2>
+      <div className="mb-4 flex items-center justify-between gap-4">
+        <h2 id={id}>{title}</h2>
+        <IconButton icon="close" label={t('close')} className="-my-2 -mr-2" onClick={onClose} />
+      </div>
       {open && children}
     </dialog>
   );

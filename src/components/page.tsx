@@ -1,5 +1,6 @@
 import { useEffect, useId, useRef, type ReactNode } from 'react';
-import { Link } from 'react-router-dom';
+import { Link, useLocation } from 'react-router-dom';
+import { useT } from '../lib/messages/use-t.ts';
 
 interface PageHeadingProps {
   title: string;
@@ -16,10 +17,12 @@ interface PageHeadingProps {
 /** The heading of a page: names the browser's tab, and takes the focus when one arrives here. */
 export function PageHeading({ title, over, up, low = false, children }: PageHeadingProps) {
   const heading = useRef<HTMLHeadingElement>(null);
+  const { key } = useLocation();
   useEffect(() => {
     document.title = `${title} – Dawnvane`;
-    heading.current?.focus({ preventScroll: true });
-  }, [title]);
+    // The router calls the entry that the browser itself loaded `default`: there the reader begins at the top.
+    if (key !== 'default') heading.current?.focus({ preventScroll: true });
+  }, [title, key]);
   return (
     <header className={low ? 'mb-3' : 'mb-6'}>
       {up && (
@@ -63,9 +66,6 @@ export function Panel({ title, actions, children }: PanelProps) {
 
 /** Whose word is final: stands on every page. */
 export function LastWord() {
-  return (
-    <p className="text-sm text-ink-soft">
-      The label is the law. Local rules and a licensed applicator’s judgement come first, and a reading on site beats any forecast.
-    </p>
-  );
+  const t = useT();
+  return <p className="text-sm text-ink-soft">{t('lastWord')}</p>;
 }

@@ -1,4 +1,5 @@
 import { Component, type ReactNode } from 'react';
+import { useT } from '../lib/messages/use-t.ts';
 import { Button } from './button.tsx';
 
 /** Nothing here yet: says what to do next. */
@@ -8,8 +9,9 @@ export function EmptyState({ children }: { children: ReactNode }) {
 
 /** Holds the place of what is loading. */
 export function Skeleton({ lines = 3 }: { lines?: number }) {
+  const t = useT();
   return (
-    <div role="status" aria-label="Loading" className="space-y-3 py-1">
+    <div role="status" aria-label={t('loading')} className="space-y-3 py-1">
       {Array.from({ length: lines }, (_, index) => (
         <div key={index} className="h-5 rounded bg-ink/10 motion-safe:animate-pulse" style={{ width: `${88 - ((index * 23) % 40)}%` }} />
       ))}
@@ -36,15 +38,20 @@ export class PanelErrorBoundary extends Component<BoundaryProps, { error: Error 
       this.props.onRetry();
       this.setState({ error: null });
     };
-    return (
-      <div role="alert" className="rounded-lg border-[1.5px] border-rose-deep px-4 py-4">
-        <p className="mb-3">This part could not be loaded: {this.state.error.message}</p>
-        <Button variant="quiet" onClick={retry}>
-          Try again
-        </Button>
-      </div>
-    );
+    return <Failed because={this.state.error.message} retry={retry} />;
   }
+}
+
+function Failed({ because, retry }: { because: string; retry: () => void }) {
+  const t = useT();
+  return (
+    <div role="alert" className="rounded-lg border-[1.5px] border-rose-deep px-4 py-4">
+      <p className="mb-3">{t('panel.failed', { because })}</p>
+      <Button variant="quiet" onClick={retry}>
+        {t('tryAgain')}
+      </Button>
+    </div>
+  );
 }
 
 /** A few words set apart, such as a state. */

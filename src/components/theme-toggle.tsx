@@ -1,26 +1,34 @@
-import { useSyncExternalStore } from 'react';
-import { readTheme, setTheme, subscribeTheme, type ThemeChoice } from '../lib/theme.ts';
+import { useState, useSyncExternalStore } from 'react';
+import { useT } from '../lib/messages/use-t.ts';
+import { readTheme, setTheme, subscribeTheme, type Place, type ThemeChoice } from '../lib/theme.ts';
+import { SegmentedControl } from './segmented-control.tsx';
 
-const choices: [ThemeChoice, string][] = [
-  ['light', 'Light'],
-  ['dark', 'Dark, for the field'],
-  ['system', 'As this device'],
-];
-
-/** Light, dark for before sunrise, or as the device has it. */
-export function ThemeToggle() {
+/** Light, dark for before sunrise, by the sun, or as the device has it. By the sun needs to know where: the farm, else the device. */
+export function ThemeToggle({ place }: { place?: Place }) {
+  const t = useT();
+  const [noPlace, setNoPlace] = useState(false);
   const theme = useSyncExternalStore(subscribeTheme, readTheme, () => 'system' as const);
+
+  function choose(choice: ThemeChoice) {
+    setNoPlace(false);
+    if (choice !== 'sun') return setTheme(choice);
+    if (place) return setTheme('sun', place);
+    if (!('geolocation' in navigator)) return setNoPlace(true);
+    navigator.geolocation.getCurrentPosition(
+      ({ coords }) => setTheme('sun', { latitude: coords.latitude, longitude: coords.longitude }),
+      () => setNoPlace(true),
+    );
+  }
+
+  const options = (['light', 'dark', 'sun', 'system'] as const).map((choice) => [choice, t(`theme.${choice}`)] as const);
   return (
-    <fieldset>
-      <legend className="mb-2 font-semibold">Light or dark</legend>
-      <div className="flex flex-wrap gap-2">
-        {choices.map(([value, name]) => (
-          <label key={value} className="inline-flex min-h-touch cursor-pointer items-center gap-3 rounded-lg border-[1.5px] border-ink/25 px-4 has-checked:border-ink has-checked:bg-paper-sunk">
-            <input type="radio" name="theme" value={value} checked={theme === value} onChange={() => setTheme(value)} className="size-5 accent-needle" />
-            {name}
-          </label>
-        ))}
-      </div>
-    </fieldset>
+    <div>
+      <SegmentedControl legend={t('theme.legend')} value={theme} onChange={choose} options={options} />
+      {noPlace && (
+        <p role="alert" className="mt-2">
+          {t('theme.noPlace')}
+        </p>
+      )}
+    </div>
   );
 }

@@ -1,4 +1,5 @@
 import { createContext, use, useCallback, useEffect, useState, type ReactNode } from 'react';
+import { useT } from '../lib/messages/use-t.ts';
 import { Button } from './button.tsx';
 
 interface ToastOptions {
@@ -16,6 +17,7 @@ const shownWithUndoMs = 12_000;
 export const useToast = (): Say => use(ToastContext);
 
 export function ToastProvider({ children }: { children: ReactNode }) {
+  const t = useT();
   const [toast, setToast] = useState<{ text: string; undo: (() => void) | undefined; key: number } | null>(null);
   const say = useCallback<Say>((text, options) => setToast((before) => ({ text, undo: options?.undo, key: (before?.key ?? 0) + 1 })), []);
   useEffect(() => {
@@ -39,7 +41,7 @@ export function ToastProvider({ children }: { children: ReactNode }) {
                   setToast(null);
                 }}
               >
-                Undo
+                {t('undo')}
               </Button>
             )}
           </div>

@@ -125,3 +125,17 @@ describe('a reading on site', () => {
     await browser.post(at('/readings')).send({ takenAt: app.clock.now().toISOString() }).expect(422);
   });
 });
+
+describe('a farm that moves', () => {
+  it('is not judged on the forecast of where it was', async () => {
+    const { browser, at, daybreak } = await farm();
+    await daybreak();
+    const { body: before } = await browser.get(at('')).expect(200);
+    for (const provider of ['openMeteo', 'nws', 'metNorway'] as const) fakes.setMood(provider, 'error500');
+    await browser.put(at('')).send({ name: before.name, latitude: 39.1, longitude: -94.6, elevationM: 250 }).expect(200);
+    const { forecast, mornings } = await daybreak();
+    expect(forecast).toBeNull();
+    expect(mornings[0]!.verdicts[0]).toMatchObject({ verdict: 'hold', enoughToTell: false });
+    for (const provider of ['openMeteo', 'nws', 'metNorway'] as const) fakes.setMood(provider, 'ok');
+  });
+});

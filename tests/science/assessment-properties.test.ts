@@ -14,11 +14,11 @@ const runs = { numRuns: 300, seed: 20261201 };
 /** An hour's weather around fair and foul. */
 const weather = fc.record({
   temperature2mC: fc.double({ min: -2, max: 32, noNaN: true }),
-  windSpeed10mMs: fc.double({ min: 0, max: 9, noNaN: true }),
+  windSpeed10mMs: fc.double({ min: 0, max: 6, noNaN: true }),
   windFromDeg: fc.double({ min: 0, max: 360, noNaN: true }),
   cloudCoverPct: fc.double({ min: 0, max: 100, noNaN: true }),
-  precipitationMm: fc.oneof({ weight: 6, arbitrary: fc.constant(0) }, { weight: 1, arbitrary: fc.double({ min: 0, max: 5, noNaN: true }) }),
-  precipitationProbabilityPct: fc.oneof({ weight: 6, arbitrary: fc.integer({ min: 0, max: 30 }) }, { weight: 1, arbitrary: fc.integer({ min: 0, max: 100 }) }),
+  precipitationMm: fc.oneof({ weight: 20, arbitrary: fc.constant(0) }, { weight: 1, arbitrary: fc.double({ min: 0, max: 5, noNaN: true }) }),
+  precipitationProbabilityPct: fc.oneof({ weight: 20, arbitrary: fc.integer({ min: 0, max: 30 }) }, { weight: 1, arbitrary: fc.integer({ min: 0, max: 100 }) }),
 });
 
 /** Three-hourly weather for three days, humidity and gusts in keeping with it. */
@@ -41,9 +41,9 @@ const limitsArbitrary = fc.record(
     windMaxMs: fc.double({ min: 1, max: 8, noNaN: true }),
     windMinMs: fc.double({ min: 0, max: 1, noNaN: true }),
     gustMaxMs: fc.double({ min: 3, max: 15, noNaN: true }),
-    inversionMax: fc.double({ min: 0, max: 1, noNaN: true }),
-    rainFreeHours: fc.integer({ min: 0, max: 24 }),
-    foliageDry: fc.boolean(),
+    inversionMax: fc.double({ min: 0.2, max: 1, noNaN: true }),
+    rainFreeHours: fc.integer({ min: 0, max: 12 }),
+    foliageDry: fc.constantFrom(true, false, false),
     pollinators: fc.record({ kinds: fc.subarray(['honeyBee', 'bumbleBee', 'masonBee'] as const, { minLength: 1 }), bloom: fc.boolean(), beeStatement: fc.constantFrom('none', 'notWhileForaging', 'notInBloom') }),
     temperatureMinC: fc.double({ min: -5, max: 8, noNaN: true }),
     temperatureMaxC: fc.double({ min: 15, max: 32, noNaN: true }),

@@ -1,4 +1,5 @@
 import { useId, type HTMLInputTypeAttribute, type ReactNode } from 'react';
+import { useT } from '../messages/use-t.ts';
 import type { Bound } from './use-typed-form.ts';
 
 interface FieldProps extends Bound {
@@ -37,18 +38,19 @@ function sentence(label: string, problem: string): string {
 
 export function Problem({ id, children }: { id: string; children: ReactNode }) {
   return (
-    <p id={id} className="mt-1 font-semibold text-rose-deep">
+    <p id={id} data-problem className="mt-1 font-semibold text-rose-deep">
       {children}
     </p>
   );
 }
 
 function Frame({ id, label, hint, problem, required, wide = false, children }: FrameProps) {
+  const t = useT();
   return (
-    <div className={wide ? 'col-span-full' : ''}>
+    <div data-field className={wide ? 'col-span-full' : ''}>
       <label htmlFor={id} className="block font-semibold">
         {label}
-        {!required && <span className="font-normal text-ink-soft"> (if any)</span>}
+        {!required && <span className="font-normal text-ink-soft"> ({t('form.optional')})</span>}
       </label>
       {children}
       {hint && (
@@ -125,7 +127,7 @@ const checkLook = 'size-6 shrink-0 accent-needle';
 export function CheckField({ registration, problem, label, hint }: FieldProps) {
   const id = useId();
   return (
-    <div className="col-span-full">
+    <div data-field className="col-span-full">
       <label className="flex min-h-touch items-center gap-3">
         <input type="checkbox" className={checkLook} {...described(id, hint, problem)} {...registration} />
         <span className="font-semibold">{label}</span>
@@ -144,7 +146,7 @@ export function CheckField({ registration, problem, label, hint }: FieldProps) {
 export function CheckGroup({ registration, problem, label, hint, choices }: FieldProps & { choices: Choices }) {
   const id = useId();
   return (
-    <fieldset className="col-span-full" aria-describedby={problem ? problemId(id) : undefined}>
+    <fieldset data-field className="col-span-full" aria-describedby={problem ? problemId(id) : undefined}>
       <legend className="font-semibold">{label}</legend>
       {hint && <p className="text-sm text-ink-soft">{hint}</p>}
       <div className="flex flex-wrap gap-x-6">

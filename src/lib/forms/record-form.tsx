@@ -1,5 +1,7 @@
-import { useEffect, useRef, type FormEvent, type ReactNode } from 'react';
+import { useEffect, useRef, useState, type FormEvent, type ReactNode } from 'react';
 import { Button, ButtonLink } from '../../components/index.ts';
+import { useT } from '../messages/use-t.ts';
+import { ErrorSummary, problemsIn, type FoundProblem } from './error-summary.tsx';
 
 interface FieldsProps {
   legend?: string;
@@ -45,10 +47,26 @@ interface RecordFormProps {
   children: ReactNode;
 }
 
-/** A form: what is wrong with the whole is told above its buttons, what is wrong with a field beside it. */
+/** A form: what is wrong with a field stands beside it, several problems are listed above as well, and what is wrong with the whole is told above its buttons. */
 export function RecordForm({ form, saveLabel, cancelTo, cancel, children }: RecordFormProps) {
+  const t = useT();
+  const [problems, setProblems] = useState<FoundProblem[]>([]);
+
+  async function send(event: FormEvent<HTMLFormElement>) {
+    const element = event.currentTarget;
+    setProblems([]);
+    await form.submit(event);
+    // The problems stand beside their fields once the page has been drawn anew.
+    requestAnimationFrame(() => {
+      const found = problemsIn(element);
+      if (found.length === 1) found[0]!.input.focus();
+      else setProblems(found);
+    });
+  }
+
   return (
-    <form noValidate onSubmit={(event) => void form.submit(event)}>
+    <form noValidate onSubmit={(event) => void send(event)}>
+      <ErrorSummary problems={problems} />
       {children}
       {form.formProblem && (
         <p role="alert" className="mb-4 rounded-lg border-[1.5px] border-rose-deep px-4 py-3">
@@ -59,10 +77,10 @@ export function RecordForm({ form, saveLabel, cancelTo, cancel, children }: Reco
         <Button type="submit" busy={form.busy}>
           {saveLabel}
         </Button>
-        {cancelTo && <ButtonLink to={cancelTo}>Leave it</ButtonLink>}
+        {cancelTo && <ButtonLink to={cancelTo}>{t('form.leave')}</ButtonLink>}
         {cancel && (
           <Button variant="quiet" onClick={cancel}>
-            Leave it
+            {t('form.leave')}
           </Button>
         )}
       </div>

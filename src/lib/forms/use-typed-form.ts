@@ -66,15 +66,16 @@ export function useTypedForm<Body extends object>({ schema, more, numbers, store
     return { ...result, errors: withUnits(result.errors, say) } as typeof result;
   };
 
-  const form = useForm<Values, unknown, Body>({ resolver, defaultValues: typedFrom(opened, numbers, units) as DefaultValues<Values>, mode: 'onTouched' });
+  // Judged when it is sent, then at each change: a problem that shows on leaving a field would move the button from under the finger.
+  const form = useForm<Values, unknown, Body>({ resolver, defaultValues: typedFrom(opened, numbers, units) as DefaultValues<Values>, mode: 'onSubmit', shouldFocusError: false });
 
   /** Puts each problem beside its field; what has no field here is told above the form. */
   function place(problems: readonly FieldProblem[]): string[] {
     const homeless: string[] = [];
-    problems.forEach(({ path, message }, index) => {
+    problems.forEach(({ path, message }) => {
       const field = path.replace(/^body\./, '');
       const known = field.split('.')[0]! in (opened as Record<string, unknown>);
-      if (known) form.setError(field as Path<Values>, { type: 'server', message: say(message, field) }, { shouldFocus: index === 0 });
+      if (known) form.setError(field as Path<Values>, { type: 'server', message: say(message, field) });
       else homeless.push(message);
     });
     return homeless;

@@ -15,6 +15,7 @@ export const en = {
   'theme.dark': 'Dark, for the field',
   'theme.system': 'As this device',
   'theme.sun': 'By the sun: dark until sunrise',
+  'theme.noPlace': 'The device does not say where it is, so sunrise cannot be known. Allow it in the browser’s settings, or choose light or dark.',
 
   'limit.wind': 'Wind',
   'limit.gusts': 'Gusts',
@@ -75,10 +76,7 @@ export const en = {
 
   'form.problems': '{count} entries need another look',
   'form.optional': 'if any',
-  'form.save': 'Save',
   'form.leave': 'Leave it',
-  'file.choose': 'Choose a file',
-  'file.none': 'No file chosen',
 
   'table.filter': 'Find in this table',
   'table.csv': 'Save as CSV',

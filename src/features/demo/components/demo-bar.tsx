@@ -21,14 +21,15 @@ export function DemoBar() {
   return (
     <div className="bg-[#1e2440] text-[#fbf7ee]">
       <nav aria-label="Demo" className="mx-auto flex max-w-6xl items-center overflow-x-auto px-1 text-sm md:px-3">
-        <NavLink to={paths.demoClock()} className={look} aria-label="Demo clock">
+        <NavLink to={paths.demoClock()} className={look}>
+          <span className="sr-only">Demo clock </span>
           {clock ? (
             <>
               <span className="hidden md:inline">{shortDate(dateOf(clock.now, clock.timeZone))},&nbsp;</span>
               {clockTime(clock.now, { units, timeZone: clock.timeZone })}
             </>
           ) : (
-            'Clock'
+            'starting'
           )}
         </NavLink>
         {clock && <StepButtons clock={clock} only={1} />}
