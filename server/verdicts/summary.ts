@@ -1,6 +1,6 @@
 import type { PlanVerdict } from '../../shared/api/mornings.ts';
 import type { AssessmentAnswer, AssessmentStep } from '../../shared/assessment/answer.ts';
-import { headlineOf } from '../../shared/assessment/sentences.ts';
+import { bestWindowOf, headlineOf } from '../../shared/assessment/sentences.ts';
 
 /** Every second step of the assessment: 10 minutes. */
 const ribbonStride = 2;
@@ -51,7 +51,7 @@ export function summaryOf(
 
 /** The window the job goes into; on a hold, the longest there is. */
 function chosenWindow(answer: AssessmentAnswer): PlanVerdict['window'] {
-  const fitting = answer.windows.find((window) => window.bestStart !== null);
+  const fitting = bestWindowOf(answer);
   if (fitting) return fitting;
   return answer.windows.reduce<PlanVerdict['window']>((longest, window) => (longest && longest.minutes >= window.minutes ? longest : window), null);
 }

@@ -6,10 +6,10 @@ import { createReadStream } from 'node:fs';
 import { parseArgs } from 'node:util';
 import { z } from 'zod';
 import { answerSchema } from './answer.ts';
-import { assess } from './assess.ts';
 import { caseSchema } from './case.ts';
 import { linesOf } from './command-lines.ts';
-import { parseCase, type CaseProblem } from './problems.ts';
+import { answerText, problem } from './command-answer.ts';
+import type { CaseProblem } from './problems.ts';
 import type { AnswerOptions } from './answer-of.ts';
 
 const usage = `usage: npm run --silent assess -- [CASE.json] [--lines] [--units us|metric]
@@ -18,25 +18,6 @@ Without a file the case is read from standard input. --lines reads one case a li
 
 /** Bytes of one case; more is no case. */
 const mostBytes = 8_000_000;
-
-/** Answers one text: the assessment, or what is wrong with it. */
-function answerText(text: string, options: AnswerOptions): { answer: unknown; problems: CaseProblem[] | null } {
-  if (text.trim() === '') return problem('is empty; give a case as JSON');
-  let value: unknown;
-  try {
-    value = JSON.parse(text.replace(/^\uFEFF/, ''));
-  } catch (error) {
-    return problem(`is not JSON: ${error instanceof Error ? error.message.slice(0, 200) : 'unreadable'}`);
-  }
-  const parsed = parseCase(value);
-  if (!parsed.ok) return { answer: { problems: parsed.problems }, problems: parsed.problems };
-  return { answer: assess(parsed.case, options), problems: null };
-}
-
-function problem(message: string): { answer: unknown; problems: CaseProblem[] } {
-  const problems = [{ path: '', message }];
-  return { answer: { problems }, problems };
-}
 
 /** Writes and waits while the reader is slow. */
 async function write(text: string): Promise<void> {

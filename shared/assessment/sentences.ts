@@ -55,7 +55,7 @@ export function headlineOf(answer: AssessmentAnswer, options: SentenceOptions): 
   return headlines.bareHold();
 }
 
-/** The window a go means: the one whose best start leaves the most headroom. */
+/** The window a go means: the one that its binding reason lies in. */
 export function bestWindowOf(answer: Pick<AssessmentAnswer, 'windows' | 'reasons'>): AssessmentAnswer['windows'][number] | null {
   const fitting = answer.windows.filter((window) => window.bestStart !== null);
   const binding = answer.reasons.find((reason) => reason.kind === 'binding')?.at;

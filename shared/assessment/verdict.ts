@@ -4,7 +4,7 @@ import { limitJudges } from './limits/index.ts';
 import type { PreparedMorning } from './prepare.ts';
 import type { PlanToJudge, Track } from './track.ts';
 import { stepMinutes } from './morning.ts';
-import { fitInto, minutesOf, runsOf, type Fit, type StepRun } from './windows.ts';
+import { betterFit, fitInto, minutesOf, runsOf, type Fit, type StepRun } from './windows.ts';
 
 /** A judged plan in compact form: what the answer, its sentences and an ensemble's count are made from. */
 export interface Judgement {
@@ -21,7 +21,7 @@ export interface Judgement {
   runs: StepRun[];
   /** One per run; null where the job does not fit. */
   fits: (Fit | null)[];
-  /** The fit with the most headroom, the earliest of equals. */
+  /** The fit that the notice names; see `betterFit`. */
   chosen: Fit | null;
   verdict: 'go' | 'hold';
   enoughToTell: boolean;
@@ -48,9 +48,9 @@ export function decide(morning: PreparedMorning, plan: PlanToJudge): Judgement {
   for (let step = 0; step < count; step += 1) isOpen[step] = hasHardTrack && isUntold[step] === 0 && least[step]! >= 0 ? 1 : 0;
   const neededMinutes = plan.minutesNeeded + plan.reserveMinutes;
   const runs = runsOf(isOpen);
-  const fits = runs.map((run) => fitInto(run, least, neededMinutes));
-  let chosen: Fit | null = null;
-  for (const fit of fits) if (fit && (!chosen || fit.headroom > chosen.headroom)) chosen = fit;
+  const againstAdvice = stepsAgainstAdvice(tracks, count);
+  const fits = runs.map((run) => fitInto(run, least, againstAdvice, neededMinutes));
+  const chosen = fits.reduce(betterFit, null);
   const enoughToTell = chosen !== null || (hasHardTrack && !couldFit(least, isUntold, neededMinutes));
   const judgement: Judgement = { morning, plan, neededMinutes, tracks, least, leastTrack, isUntold, runs, fits, chosen, verdict: chosen ? 'go' : 'hold', enoughToTell, bindingLimit: null };
   judgement.bindingLimit = bindingOf(judgement);
@@ -79,6 +79,16 @@ function scan(tracks: Track[], least: Float64Array, leastTrack: Int8Array, isUnt
     else if (least[step]! < 0) isUntold[step] = 0;
   }
   return hasHard;
+}
+
+/** Steps in which a limit that does not hold is passed all the same. */
+function stepsAgainstAdvice(tracks: readonly Track[], count: number): Uint8Array {
+  const against = new Uint8Array(count);
+  for (const track of tracks) {
+    if (track.isHard) continue;
+    for (let step = 0; step < count; step += 1) if (track.headroom[step]! < 0) against[step] = 1;
+  }
+  return against;
 }
 
 /** True when the job would fit if every unknown step were open. */

@@ -3,7 +3,6 @@ import { NavLink, useLocation } from 'react-router-dom';
 import { useT } from '../lib/messages/use-t.ts';
 import { Icon, type IconName } from './icon.tsx';
 import { LastWord } from './page.tsx';
-import { VerdictSign } from './verdict-sign.tsx';
 
 export interface FrameLink {
   to: string;
@@ -70,10 +69,7 @@ export function AppFrame({ links, place, strip, children }: AppFrameProps) {
       <div className="mx-auto max-w-6xl md:grid md:grid-cols-[12rem_1fr] md:gap-10 md:px-6">
         {links.length > 0 && (
           <nav aria-label={t('frame.pages')} className="fixed inset-x-0 bottom-0 z-10 border-t border-ink/15 bg-paper-raised pb-[env(safe-area-inset-bottom)] md:sticky md:top-6 md:self-start md:border-0 md:bg-transparent md:pt-8">
-            <p className="mb-4 hidden items-center gap-2 font-bold md:flex">
-              <VerdictSign state="go" size={32} silent />
-              {place ?? 'Dawnvane'}
-            </p>
+            <p className="frame-place hidden md:block">{place ?? 'Dawnvane'}</p>
             <ul className="grid grid-flow-col auto-cols-fr md:block">
               {links.map((link, index) => (
                 <li key={link.to} className={index >= inBar ? 'hidden md:block' : ''}>

@@ -37,8 +37,9 @@ export function ToastProvider({ children }: { children: ReactNode }) {
               <Button
                 variant="link"
                 onClick={() => {
-                  toast.undo?.();
+                  // First: what is undone may say a word of its own.
                   setToast(null);
+                  toast.undo?.();
                 }}
               >
                 {t('undo')}

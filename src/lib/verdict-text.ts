@@ -1,10 +1,10 @@
 import type { PlanVerdict } from '../../shared/api/mornings.ts';
 import type { Reason } from '../../shared/assessment/answer.ts';
 import { retell } from '../../shared/assessment/sentences.ts';
-import type { VerdictState } from '../../shared/look/verdict-sign.ts';
+import { stateOf } from '../../shared/look/verdict-sign.ts';
 import { clockTime, type Reader } from './time.ts';
 
-export const stateOf = ({ verdict, enoughToTell }: Pick<PlanVerdict, 'verdict' | 'enoughToTell'>): VerdictState => (enoughToTell ? verdict : 'unknown');
+export { stateOf };
 
 /** `5:25 to 6:10`; nothing without a window. */
 export function windowText(verdict: Pick<PlanVerdict, 'verdict' | 'window'>, reader: Reader): string {

@@ -17,6 +17,9 @@ describe('the work on a farm', () => {
     await page.getByRole('heading', { level: 1, name }).waitFor();
   };
 
+  /** A problem beside its field; the summary of the form names it too, as a button. */
+  const besideField = (page: Page, problem: string) => page.getByRole('paragraph').filter({ hasText: problem });
+
   it('keeps what was typed into a new block, shows each problem beside its field, and saves it once it is right', async () => {
     const page = await demo.signedIn('owner', phone);
     await page.goto(`${farmPathOf(page)}/farm`);
@@ -26,12 +29,13 @@ describe('the work on a farm', () => {
     await page.getByLabel(/^Trees/).fill('12.5');
     await page.getByRole('button', { name: 'Add the block' }).click();
 
-    await page.getByText('Name must not be empty.').waitFor();
-    await page.getByText('Area must be a number, such as 12.5.').waitFor();
-    await page.getByText('Trees must be a whole number.').waitFor();
+    await besideField(page, 'Name must not be empty.').waitFor();
+    await besideField(page, 'Area must be a number, such as 12.5.').waitFor();
+    await besideField(page, 'Trees must be a whole number.').waitFor();
     expect(await page.getByLabel('Crop').inputValue()).toBe('Pear');
     expect(await page.getByLabel(/^Area/).inputValue()).toBe('half');
     expect(await page.getByLabel(/^Area/).getAttribute('aria-invalid')).toBe('true');
+    await page.getByRole('button', { name: 'Name must not be empty.' }).click();
     expect(await page.evaluate(() => document.activeElement?.getAttribute('name'))).toBe('name');
 
     await page.getByLabel('Name', { exact: true }).fill('Mill pears');
@@ -55,7 +59,7 @@ describe('the work on a farm', () => {
     await page.getByLabel('Crop').fill('Apple');
     await page.getByLabel(/^Area/).fill('3');
     await page.getByRole('button', { name: 'Add the block' }).click();
-    await page.getByText('Area must be at most 2471 acres.').waitFor();
+    await besideField(page, 'Area must be at most 2471 acres.').waitFor();
     expect(await page.getByRole('alert').innerText()).toContain('Correct the entries');
     expect(await page.getByLabel('Crop').inputValue()).toBe('Apple');
   });
@@ -135,6 +139,8 @@ describe('the work on a farm', () => {
   it('reads the ribbon of a morning by keys alone', async () => {
     const page = await demo.signedIn('owner');
     await page.getByRole('region', { name: 'The mornings after' }).getByRole('link').first().press('Enter');
+    await page.waitForURL(/\/mornings\//);
+    await page.getByRole('heading', { level: 1, name: /day, / }).waitFor();
     const slider = page.getByRole('slider').first();
     await slider.focus();
     await page.keyboard.press('Home');

@@ -1,6 +1,7 @@
 /**
  * Sun times of suncalc 2 against almanac rows (USNO, JPL DE421, published in test files of open libraries), NREL SPA and NOAA values,
- * and astronomy-engine over a grid. Where suncalc is worse is named in the grid's test.
+ * and astronomy-engine over a grid. Where suncalc is worse: up to 10 s at 64° N near the white nights, and there, on a day or two a year,
+ * it still finds a civil dawn that only grazes −6° and that astronomy-engine no longer finds (64 N 10 E, 2024-07-23).
  */
 import { existsSync, readFileSync } from 'node:fs';
 import { Body, Observer, SearchAltitude, SearchRiseSet } from 'astronomy-engine';
@@ -125,7 +126,7 @@ describe('a grid of 60 places × 366 days', () => {
   /** Near the ends of the white nights the sun grazes −6° and the instant is ill-defined: below this climb, degrees per minute, it is not judged. */
   const grazing = 0.02;
 
-  it('agrees with astronomy-engine within 60 s: sunrise, and civil dawn wherever the sun does not graze', () => {
+  it('agrees with astronomy-engine within 15 s (goal 60 s): sunrise, and civil dawn wherever the sun does not graze', () => {
     let compared = 0;
     let grazed = 0;
     const worst = { sunrise: { seconds: 0, where: '' }, civilDawn: { seconds: 0, where: '' } };
@@ -152,12 +153,12 @@ describe('a grid of 60 places × 366 days', () => {
       }
     }
     expect(compared).toBeGreaterThan(43_000);
-    expect(grazed).toBeLessThan(600);
-    expect(worst.sunrise.seconds, `sunrise, worst at ${worst.sunrise.where}`).toBeLessThan(60);
-    expect(worst.civilDawn.seconds, `civil dawn, worst at ${worst.civilDawn.where}`).toBeLessThan(60);
+    expect(grazed).toBeLessThan(60);
+    expect(worst.sunrise.seconds, `sunrise, worst at ${worst.sunrise.where}`).toBeLessThan(15);
+    expect(worst.civilDawn.seconds, `civil dawn, worst at ${worst.civilDawn.where}`).toBeLessThan(15);
   }, 120_000);
 
-  it('agrees with the NOAA formulas within 60 s on the same grid', () => {
+  it('agrees with the NOAA formulas within 5 s on the same grid, below 60°', () => {
     let worst = 0;
     for (const latitude of latitudes.filter((degrees) => Math.abs(degrees) < 60)) {
       for (const longitude of longitudes) {
@@ -170,6 +171,6 @@ describe('a grid of 60 places × 366 days', () => {
       }
     }
     expect(worst).toBeGreaterThan(0);
-    expect(worst).toBeLessThan(60);
+    expect(worst).toBeLessThan(5);
   });
 });

@@ -9,7 +9,7 @@ export const fieldSite = { latitude: 51.41866, longitude: 9.916, elevationM: 200
 export const fieldFile = '../shared/data/field_goettingen/weathr.csv';
 export const hasField = (): boolean => existsSync(fieldFile);
 const hourMs = 3_600_000;
-/** Wind at 10 m over that at 2 m above a crop. Logarithmic profile, roughness 0.05 m [fao56, eq. 47 in spirit]. */
+/** Wind at 10 m over that at 2 m above a crop. Logarithmic profile over a roughness of 0.05 m (common practice, no source). */
 const windTo10m = Math.log(10 / 0.05) / Math.log(2 / 0.05);
 
 export interface FieldHour {

@@ -10,8 +10,9 @@ const hourMs = 3_600_000;
 const steadyWindMs = 1.5;
 
 /**
- * Winter and spring of the crop field: T(2 m) − T(5 cm) above its own afternoon, mornings from one hour before sunrise (sun at about
- * −9°) to four after. A layer far below the mast's, no wind, the night's sky guessed from the days around: a hard test of transfer.
+ * Winter and spring of the crop field: T(2 m) − T(5 cm) on mornings, rising sun between −9° and 32°. A layer far below the
+ * mast's, no wind, the night's sky guessed from the days around: a hard test of transfer. With the sun well up the sensor at 5 cm still
+ * reads colder than that at 2 m on a quarter of the mornings (shade or lag), so dawn is shown apart.
  */
 export function lowLayerOfField(): string | null {
   if (!hasField()) return null;
@@ -22,13 +23,15 @@ export function lowLayerOfField(): string | null {
     const altitude = fieldSunAltitudeDegAt(epochMs);
     return altitude > -9 && altitude < 32 && fieldSunAltitudeDegAt(epochMs + hourMs) > altitude;
   });
-  for (const above of [0.5, 1, 2]) {
-    const judged = mornings.flatMap((one) => {
-      const { likelihood } = inversion.at(one.epochMs);
-      return likelihood === null ? [] : [{ likelihood, happened: one.lowDifferenceC > above }];
-    });
-    const scores = scoresOf(judged.map(({ likelihood }) => likelihood), judged.map(({ happened }) => happened));
-    rows.push([`crop field, January–April, T(2 m) − T(5 cm) > ${above} °C`, scores.hours, `${Math.round(100 * scores.share)} %`, scores.area.toFixed(3)]);
+  for (const { name, highestSunDeg } of [{ name: 'dawn, sun below 8°', highestSunDeg: 8 }, { name: 'whole morning, sun below 32°', highestSunDeg: 32 }]) {
+    for (const above of [0.5, 1, 2]) {
+      const judged = mornings.flatMap((one) => {
+        const { likelihood } = inversion.at(one.epochMs);
+        return likelihood === null || fieldSunAltitudeDegAt(one.epochMs) > highestSunDeg ? [] : [{ likelihood, happened: one.lowDifferenceC > above }];
+      });
+      const scores = scoresOf(judged.map(({ likelihood }) => likelihood), judged.map(({ happened }) => happened));
+      rows.push([`crop field, January–April, T(2 m) − T(5 cm) > ${above} °C, ${name}`, scores.hours, `${Math.round(100 * scores.share)} %`, scores.area.toFixed(3)]);
+    }
   }
   return markdown(['record', 'morning hours', 'share', 'ROC area'], rows);
 }

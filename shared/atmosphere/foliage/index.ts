@@ -1,4 +1,6 @@
 import type { ForecastHour, Site } from '../../assessment/case.ts';
+import { coefficients } from './coefficients.ts';
+import { featureNames, stepHour, type Moisture } from './features.ts';
 
 export interface FoliageInput {
   site: Pick<Site, 'latitude' | 'longitude' | 'elevationM'>;
@@ -7,55 +9,74 @@ export interface FoliageInput {
 }
 
 const hourMs = 3_600_000;
+const longestLookMs = 24 * hourMs;
 /** From this likelihood on, leaves count as wet. */
 export const wetFrom = 0.5;
 const logistic = (logit: number): number => 1 / (1 + Math.exp(-logit));
-
-/** Water film on a leaf, mm: about what stays after rain. Common practice, no source. */
-const filmMostMm = 0.2;
-
-/** Evaporation from a wet leaf, mm per hour, by the drying power of air and the sun on it: after Dalton, coefficients by hand. */
-const dryingMmPerHour = (depressionC: number, windMs: number, shortwaveWm2: number): number => 0.012 * depressionC * (1 + 0.5 * windMs) + 0.00035 * shortwaveWm2;
+const logitWetFrom = Math.log(wetFrom / (1 - wetFrom));
 
 /**
- * How likely leaves are wet at each instant: dew when the air is near its dew point, rain that has not dried off yet.
- * Unknown where temperature or dew point is.
+ * How likely leaves are wet at each instant: a film of water that rain fills and that the energy balance of a leaf feeds with dew or
+ * dries off, and how near the air is to its dew point, weighed by a logistic regression fitted on a leaf-wetness record
+ * (`npm run fit:foliage`). Unknown where temperature or humidity is; between hours the logit is interpolated.
  */
 export function prepareFoliage({ hours, sunAltitudeDegAt }: FoliageInput): { at(epochMs: number): { wetness: number | null }; driesAt(afterEpochMs: number): number | null } {
-  const first = hours[0] ? Date.parse(hours[0].time) : 0;
-  const logits = new Map<number, number | null>();
-  let filmMm: number | null = 0;
-  for (const hour of hours) {
-    const slot = Math.round((Date.parse(hour.time) - first) / hourMs);
-    const depressionC = hour.temperature2mC === null || hour.dewPoint2mC === null ? null : Math.max(0, hour.temperature2mC - hour.dewPoint2mC);
-    const windMs = hour.windSpeed10mMs ?? 1;
-    const sunWm2 = hour.shortwaveWm2 ?? Math.max(0, 600 * Math.sin((sunAltitudeDegAt(first + slot * hourMs) * Math.PI) / 180));
-    logits.set(slot, depressionC === null || filmMm === null ? null : 2.4 - 1.35 * depressionC - 0.25 * windMs - 0.004 * sunWm2 + 22 * filmMm);
-    if (depressionC === null) filmMm = hour.precipitationMm === null ? null : Math.min(filmMostMm, hour.precipitationMm);
-    else {
-      const dewMm = depressionC < 0.8 && sunWm2 < 20 ? 0.02 : 0;
-      filmMm = Math.max(0, Math.min(filmMostMm, (filmMm ?? 0) + (hour.precipitationMm ?? 0) + dewMm - dryingMmPerHour(depressionC, windMs, sunWm2)));
+  const firstMs = hours[0] ? Date.parse(hours[0].time) : 0;
+  /** Logits by hour of the grid, made in order as they are asked for; NaN = unknown. */
+  const logits: number[] = [];
+  const features = new Float64Array(featureNames.length);
+  const moisture: Moisture = { filmMm: 0 };
+  const last = hours.at(-1);
+  const isWhole = last !== undefined && Math.round((Date.parse(last.time) - firstMs) / hourMs) === hours.length - 1;
+  let next = 0;
+
+  const takeNext = (): void => {
+    const hour = hours[next]!;
+    const slot = isWhole ? next : Math.round((Date.parse(hour.time) - firstMs) / hourMs);
+    next += 1;
+    // What fell or dried in hours left out is not known: leaves count as wet after them.
+    if (slot > logits.length) moisture.filmMm = coefficients.film.rainMostMm;
+    while (logits.length < slot) logits.push(NaN);
+    const isKnown = stepHour(hour, sunAltitudeDegAt, firstMs + slot * hourMs, coefficients.film, moisture, features);
+    let logit = NaN;
+    if (isKnown) {
+      logit = coefficients.base;
+      for (let f = 0; f < features.length; f += 1) logit += coefficients.weights[f]! * features[f]!;
     }
-  }
-  const logitAt = (epochMs: number): number | null => {
-    const place = (epochMs - first) / hourMs;
+    logits.push(logit);
+  };
+
+  const logitOfHour = (slot: number): number => {
+    while (logits.length <= slot && next < hours.length) takeNext();
+    return logits[slot] ?? NaN;
+  };
+
+  const logitAt = (epochMs: number): number => {
+    const place = (epochMs - firstMs) / hourMs;
     const slot = Math.floor(place);
     const share = place - slot;
-    const from = logits.get(slot) ?? null;
-    const to = share === 0 ? from : (logits.get(slot + 1) ?? null);
-    return from === null || to === null ? null : from + share * (to - from);
+    const from = logitOfHour(slot);
+    return share === 0 ? from : from + share * (logitOfHour(slot + 1) - from);
   };
-  const stepMs = 300_000;
+
   return {
     at(epochMs) {
       const logit = logitAt(epochMs);
-      return { wetness: logit === null ? null : logistic(logit) };
+      return { wetness: Number.isNaN(logit) ? null : logistic(logit) };
     },
+    /** First instant from `afterEpochMs` on when leaves count as dry, epoch ms; null when that is not known or not within a day. */
     driesAt(afterEpochMs) {
-      for (let at = afterEpochMs; at < afterEpochMs + 24 * hourMs; at += stepMs) {
-        const logit = logitAt(at);
-        if (logit === null) return null;
-        if (logit < Math.log(wetFrom / (1 - wetFrom))) return at;
+      let at = afterEpochMs;
+      let logit = logitAt(at);
+      while (!Number.isNaN(logit) && at < afterEpochMs + longestLookMs) {
+        if (logit < logitWetFrom) return at;
+        const slot = Math.floor((at - firstMs) / hourMs) + 1;
+        const hourEndMs = firstMs + slot * hourMs;
+        const end = logitOfHour(slot);
+        // Within an hour the logit runs straight: its crossing is where it falls dry.
+        if (end < logitWetFrom) return Math.ceil(at + ((hourEndMs - at) * (logit - logitWetFrom)) / (logit - end)) + 1;
+        at = hourEndMs;
+        logit = end;
       }
       return null;
     },

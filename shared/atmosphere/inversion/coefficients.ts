@@ -13,21 +13,21 @@ export interface Coefficients {
 
 export const coefficients: Coefficients = {
   madeOf: { data: 'Lovett mast, Hudson valley, 1988, odd months (US EPA AERMOD test case): T(50 m) - T(10 m) > 0.1 °C', rows: 4180, date: '2026-12-01' },
-  base: -2.5416,
+  base: -2.535,
   weights: [
-    0.019796, // nightLoss
-    -0.0034202, // sunGain
-    -0.5456, // wind
-    -1.4183, // nightWind
-    -0.7054, // comingWind
-    -0.025627, // windOnLoss
-    -0.35541, // warming2h
-    -1.2779, // warmingInSun
-    0.060197, // drop
-    0.041568, // riseToCome
-    -0.17833, // rangeInSun
-    0.04618, // humidity
-    -0.31939, // sunToCome
+    0.019757, // nightLoss
+    -0.0034184, // sunGain
+    -0.54753, // wind
+    -1.419, // nightWind
+    -0.70461, // comingWind
+    -0.02559, // windOnLoss
+    -0.35468, // warming2h
+    -1.2708, // warmingInSun
+    0.0598, // drop
+    0.041682, // riseToCome
+    -0.18251, // rangeInSun
+    0.046133, // humidity
+    -0.32188, // sunToCome
   ],
   means: [
     24.5, // nightLoss
@@ -40,10 +40,10 @@ export const coefficients: Coefficients = {
     0.21078, // warmingInSun
     1.1491, // drop
     4.1291, // riseToCome
-    2.3221, // rangeInSun
+    2.2967, // rangeInSun
     70.954, // humidity
     0.27135, // sunToCome
   ],
-  strong: { base: -2.2804, slope: 0.81073 },
-  aloft: { base: 0.6525, perC: 4.9145 },
+  strong: { base: -2.2799, slope: 0.81056 },
+  aloft: { base: 0.65273, perC: 4.9173 },
 };

@@ -60,14 +60,15 @@ export const outside = Infinity;
 /** Temperature that a gap in the warm part of a day may have hidden above its surroundings, °C. */
 const hiddenPeakC = 1;
 
-/** Least, greatest and mean of a column from hour `from` to hour `to`; gaps read as `gap`. */
+/** Least of a column from hour `from` to hour `to`, gaps passed over. */
 function least(column: Float64Array, from: number, to: number): number {
   let found = Infinity;
   for (let slot = Math.max(0, from); slot <= Math.min(column.length - 1, to); slot += 1) if (column[slot]! < found) found = column[slot]!;
   return found;
 }
 
-function greatest(column: Float64Array, from: number, to: number): number {
+/** Greatest; `ifGap` is added where a gap may hide a greater one. */
+function greatest(column: Float64Array, from: number, to: number, ifGap: number): number {
   let found = -Infinity;
   let gap = false;
   for (let slot = Math.max(0, from); slot <= Math.min(column.length - 1, to); slot += 1) {
@@ -75,9 +76,10 @@ function greatest(column: Float64Array, from: number, to: number): number {
     if (Number.isNaN(value)) gap = true;
     else if (value > found) found = value;
   }
-  return gap ? found + hiddenPeakC : found;
+  return gap ? found + ifGap : found;
 }
 
+/** Mean; gaps read as `gap`. */
 function mean(column: Float64Array, from: number, to: number, gap: number): number {
   const start = Math.max(0, from);
   const end = Math.min(column.length - 1, to);
@@ -150,9 +152,9 @@ export function featuresAt(series: Series, slot: number, altitudeDegAt: (slot: n
   into[5] = wind * loss;
   into[6] = slot < 2 ? outside : now - t[slot - 2]!;
   into[7] = slot < 1 ? outside : warmingOf(now, t[slot - 1]!) * sine;
-  into[8] = hasDay ? Math.max(0, greatest(t, slot - 18, slot) - now - 6) : outside;
-  into[9] = hasMorrow ? greatest(t, slot, slot + 12) - now : outside;
-  into[10] = hasDay && hasMorrow ? (greatest(t, slot - 11, slot + 12) - least(t, slot - 11, slot + 12)) * sine : outside;
+  into[8] = hasDay ? Math.max(0, greatest(t, slot - 18, slot, hiddenPeakC) - now - 6) : outside;
+  into[9] = hasMorrow ? greatest(t, slot, slot + 12, hiddenPeakC) - now : outside;
+  into[10] = hasDay && hasMorrow ? (greatest(t, slot - 11, slot + 12, 0) - least(t, slot - 11, slot + 12)) * sine : outside;
   into[11] = series.humidityPct[slot]!;
   into[12] = sineOf(altitudeDegAt(slot + 2));
   return {

@@ -31,10 +31,8 @@ const forecastAloftShare = 0.3;
 const aloftMostC = 3;
 const logistic = (logit: number): number => 1 / (1 + Math.exp(-logit));
 
-/** Chance of an inversion of more than 1 °C between 10 and 50 m where one of any strength has the likelihood given, 0–1. */
-export function strongInversionChance(likelihood: number): number {
-  return logistic(coefficients.strong.base + coefficients.strong.slope * Math.log(likelihood / (1 - likelihood)));
-}
+/** Chance of more than 1 °C between 10 and 50 m where that of any inversion has this logit, 0–1. */
+const strongChance = (logit: number): number => logistic(coefficients.strong.base + coefficients.strong.slope * logit);
 
 interface PreparedHour {
   logit: number;
@@ -78,7 +76,7 @@ export function prepareInversion(input: InversionInput): { at(epochMs: number): 
         likelihood: from && to ? logistic(from.logit + share * (to.logit - from.logit)) : null,
         stabilityClass: nearest ? turnerOf(nearest.facts) : null,
         get evidence() {
-          return nearest ? evidenceOf(nearest.facts, siteWords) : [];
+          return nearest ? evidenceOf(nearest.facts, strongChance(nearest.logit), siteWords) : [];
         },
       };
     },

@@ -102,7 +102,7 @@ export function DataTable<Row>({ label, rows, columns, rowKey, to, csvName, noth
                     return (
                       <td key={key} className={`px-2 py-1 first:pl-0 ${figures ? 'text-right' : ''} ${wrap ? 'min-w-48' : 'whitespace-nowrap'}`}>
                         {index === 0 && to ? (
-                          <Link to={to(row)} className="inline-flex min-h-touch items-center font-semibold underline decoration-ink/30 underline-offset-4">
+                          <Link to={to(row)} className="inline-flex min-h-touch min-w-touch items-center font-semibold underline decoration-ink/30 underline-offset-4">
                             {content}
                           </Link>
                         ) : (
@@ -127,7 +127,7 @@ function Head<Row>({ column, sorted, onSort }: { column: TableColumn<Row>; sorte
   const t = useT();
   return (
     <th scope="col" aria-sort={sorted} className={`px-2 first:pl-0 ${column.figures ? 'text-right' : ''}`}>
-      <button type="button" onClick={onSort} className="inline-flex min-h-touch items-center gap-1 font-semibold whitespace-nowrap">
+      <button type="button" onClick={onSort} className="inline-flex min-h-touch min-w-touch items-center gap-1 font-semibold whitespace-nowrap">
         {column.head}
         {sorted !== 'none' && <Icon name={sorted === 'ascending' ? 'up' : 'down'} size={16} />}
         {sorted !== 'none' && <span className="sr-only">, {t(sortWords[sorted])}</span>}

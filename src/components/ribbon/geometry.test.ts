@@ -46,22 +46,26 @@ describe('the names of knots', () => {
   const whole = { from: 0, to: 500 };
 
   it('lie along the thread behind the knot', () => {
-    expect(placeLabels([{ at: 100, until: 500, width: 80 }], whole)).toEqual([{ index: 0, at: 109, anchor: 'start' }]);
+    expect(placeLabels([{ at: 100, until: 500, width: 80, before: true }], whole)).toEqual([{ index: 0, at: 109, anchor: 'start' }]);
   });
 
   it('stand before the knot where the thread is too short', () => {
-    expect(placeLabels([{ at: 440, until: 500, width: 80 }], whole)).toEqual([{ index: 0, at: 431, anchor: 'end' }]);
+    expect(placeLabels([{ at: 440, until: 500, width: 80, before: true }], whole)).toEqual([{ index: 0, at: 431, anchor: 'end' }]);
+  });
+
+  it('lie across no thick ribbon', () => {
+    expect(placeLabels([{ at: 440, until: 500, width: 80, before: false }], whole)).toEqual([]);
   });
 
   it('are left out where there is room on neither side', () => {
-    expect(placeLabels([{ at: 40, until: 60, width: 80 }], whole)).toEqual([]);
+    expect(placeLabels([{ at: 40, until: 60, width: 80, before: true }], whole)).toEqual([]);
   });
 
   it('never stand on each other or leave the lane, wherever the knots are tied', () => {
     fc.assert(
       fc.property(fc.uniqueArray(fc.integer({ min: 0, max: 100 }), { maxLength: 8 }), fc.integer({ min: 10, max: 160 }), (places, width) => {
         const knots = places.toSorted((one, two) => one - two).map((place) => place * 5);
-        const wishes = knots.map((at, index) => ({ at, until: (at + (knots[index + 1] ?? 500)) / 2, width }));
+        const wishes = knots.map((at, index) => ({ at, until: (at + (knots[index + 1] ?? 500)) / 2, width, before: true }));
         const spans = placeLabels(wishes, whole).map(({ at, anchor }) => (anchor === 'start' ? [at, at + width] : [at - width, at]) as [number, number]);
         spans.forEach(([from, to], index) => {
           expect(from).toBeGreaterThanOrEqual(whole.from);

@@ -97,6 +97,8 @@ export interface LabelWish {
   until: number;
   /** Room the label takes. */
   width: number;
+  /** Whether it may stand before the knot: the ribbon is thin there. */
+  before: boolean;
 }
 
 export interface PlacedLabel {
@@ -113,17 +115,17 @@ const labelOver = 30;
 
 /**
  * Places the labels of a lane's knots so that none stands on another or leaves the lane: behind the knot, along the thread,
- * where there is room; else before it; else nowhere (the list of knots still names it).
+ * where there is room; else before it, where the ribbon is thin; else nowhere (the list of knots still names it).
  */
 export function placeLabels(wishes: readonly LabelWish[], lane: { from: number; to: number }): PlacedLabel[] {
   const placed: PlacedLabel[] = [];
   let taken = lane.from;
-  wishes.forEach(({ at, until, width }, index) => {
+  wishes.forEach(({ at, until, width, before }, index) => {
     const nextKnot = wishes[index + 1]?.at ?? lane.to;
     if (at + labelGap + width <= Math.min(until + labelOver, nextKnot, lane.to)) {
       placed.push({ index, at: at + labelGap, anchor: 'start' });
       taken = at + labelGap + width;
-    } else if (at - labelGap - width >= taken) {
+    } else if (before && at - labelGap - width >= taken) {
       placed.push({ index, at: at - labelGap, anchor: 'end' });
       taken = at;
     }

@@ -66,6 +66,8 @@ const Knot = ({ place }: { place: number }) => (
 );
 
 const letterPx = 13;
+/** A label over a ribbon thinner than this can be read. */
+const thin = 0.5;
 
 /** What runs out at a knot, beside it, as far as names do not collide. */
 function KnotNames({ lane, index, layout, answer, units }: Pick<LaneProps, 'lane' | 'index' | 'layout' | 'answer' | 'units'>) {
@@ -74,10 +76,14 @@ function KnotNames({ lane, index, layout, answer, units }: Pick<LaneProps, 'lane
   const texts = lane.knots.map((knot) => knotText(lane.limit, answer, knot, units, t));
   const wishes = lane.knots.map((knot, which) => {
     const end = shut[which]?.to ?? knot;
-    return { at: knotPlace(knot, layout.at), until: end === lane.headroom.length - 1 ? layout.timeTo : layout.at(end + 0.5), width: textRoom(texts[which]!, letterPx) };
+    const width = textRoom(texts[which]!, letterPx);
+    const at = knotPlace(knot, layout.at);
+    const under = layout.indexAt(at - width, at - width);
+    // In the narrow lanes of a phone a name may only lie along a thread, never across a ribbon.
+    const before = !layout.upright && lane.headroom.slice(under, knot).every((headroom) => (headroom ?? 0) < thin);
+    return { at, until: end === lane.headroom.length - 1 ? layout.timeTo : layout.at(end + 0.5), width, before };
   });
-  // In the narrow lanes of a phone a name may only lie along a thread, never across a ribbon.
-  const placed = placeLabels(wishes, { from: layout.upright ? Number.POSITIVE_INFINITY : layout.timeFrom, to: layout.timeTo });
+  const placed = placeLabels(wishes, { from: layout.timeFrom, to: layout.timeTo });
   return placed.map(({ index: which, at, anchor }) => (
     <text
       key={which}

@@ -7,7 +7,7 @@ export function SignPart() {
   return (
     <div className="space-y-6">
       {[24, 32, 48, 96, 200].map((size) => (
-        <p key={size} className="flex items-end gap-6">
+        <p key={size} className="flex flex-wrap items-end gap-6">
           {states.map((state) => (
             <VerdictSign key={state} state={state} size={size} />
           ))}

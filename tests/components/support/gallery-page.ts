@@ -28,8 +28,11 @@ export async function openGallery(): Promise<Gallery> {
       const context = await browser.newContext({ viewport: { width: 1280, height: 860 }, reducedMotion: 'reduce', locale: 'en-US', ...options });
       const page = await context.newPage();
       await page.addInitScript((choice) => localStorage.setItem('dawnvane-theme', choice), theme);
+      const broken = new Promise<never>((_, reject) => page.once('pageerror', reject));
       await page.goto(`${address}?${query}`);
-      await page.waitForSelector('main > *');
+      // A part that cannot be drawn says why at once.
+      await Promise.race([page.waitForSelector('main > *'), broken]);
+      broken.catch(() => undefined);
       await page.evaluate(() => document.fonts.ready);
       return page;
     },

@@ -22,7 +22,7 @@ function breezy(localHour: number): Partial<ForecastHour> {
 function blustery(localHour: number): Partial<ForecastHour> {
   const windSpeed10mMs = 5.4 + 0.4 * Math.max(0, localHour - 4);
   const wet = localHour > 13;
-  return { ...breezy(localHour), windSpeed10mMs, windGust10mMs: windSpeed10mMs * 1.6, precipitationProbabilityPct: wet ? 70 : 10, precipitationMm: wet ? 1.2 : 0 };
+  return { ...breezy(localHour), windSpeed10mMs, windGust10mMs: windSpeed10mMs * 1.6, cloudCoverPct: 100, precipitationProbabilityPct: wet ? 70 : 10, precipitationMm: wet ? 1.2 : 0 };
 }
 
 const hoursOf: Record<MorningName, (localHour: number) => Partial<ForecastHour>> = {

@@ -1,6 +1,9 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
+import { lazy } from 'react';
 import { ForecastNote, StaleBanner } from '../../../components/forecast-facts.tsx';
 import { EmptyState, PageHeading } from '../../../components/index.ts';
+import { QueryPanel } from '../../../components/records/query-panel.tsx';
+import { useMediaQuery } from '../../../lib/use-media-query.ts';
 import { useFarm } from '../../../lib/session/session.ts';
 import { longDate, shortDate, weekday } from '../../../lib/time.ts';
 import { daybreakQuery } from '../api/get-daybreak.ts';
@@ -9,11 +12,15 @@ import { OtherPlans } from '../components/other-plans.tsx';
 import { PlanAnswer } from '../components/plan-answer.tsx';
 import { morningName } from '../next-step.ts';
 
+/** Too heavy for the first load of a phone, which shows the small ribbon instead. */
+const WholeRibbon = lazy(async () => ({ default: (await import('../components/whole-ribbon.tsx')).WholeRibbon }));
+
 /** The first page: the coming morning's answer, and the five after it. */
 export function DaybreakPage() {
   const { id: farmId } = useFarm();
   const { data: daybreak } = useSuspenseQuery(daybreakQuery(farmId));
   const { mornings, forecast, stale, now, timeZone } = daybreak;
+  const wide = useMediaQuery('(min-width: 64rem)');
   const [first, ...rest] = mornings;
   const lead = first && leadOf(first.verdicts);
   if (!first || !lead) {
@@ -44,6 +51,13 @@ export function DaybreakPage() {
           </div>
         </section>
       </div>
+      {wide && (
+        <div className="mt-10">
+          <QueryPanel title={lead.planName} lines={8}>
+            <WholeRibbon verdict={lead} />
+          </QueryPanel>
+        </div>
+      )}
     </>
   );
 }
