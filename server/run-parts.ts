@@ -36,6 +36,8 @@ export async function runParts(base: Services, config: Config): Promise<RunningP
     random,
     userAgent: `Dawnvane/${settings.version} (${settings.contact})`,
     warn: (message) => log.warn(message),
+    // The demo's clock is stepped, not waited for: neither are the pauses between two tries of a fake that fails.
+    ...(demo ? { sleep: async () => undefined } : {}),
     settings: { order: config.providers ?? defaultProviderOrder },
   });
   const pushKeys = await loadPushKeys(services);

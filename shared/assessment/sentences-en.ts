@@ -89,7 +89,7 @@ const minutes = (count: number): string => `${count} minute${count === 1 ? '' : 
 /** English: one clause per message, without capital and full stop. */
 export const english: { [Key in MessageKey]: (params: Messages[Key], f: Formats) => string } = {
   'limit.binding': (p, f) =>
-    p.place !== null ? `the wind comes closest to carrying spray toward ${p.place} at ${clock(f, p.at)}` : `${names[p.limit]} leaves the least to spare: ${f.ofLimit(p.limit, p.value)} against ${f.ofLimit(p.limit, p.bound)} at ${clock(f, p.at)}`,
+    p.place !== null ? `the wind comes closest to carrying spray toward ${p.place} at ${clock(f, p.at)}` : `${names[p.limit]} ${p.limit === 'gusts' || p.limit === 'pollinators' ? 'leave' : 'leaves'} the least to spare: ${f.ofLimit(p.limit, p.value)} against ${f.ofLimit(p.limit, p.bound)} at ${clock(f, p.at)}`,
   'limit.fails': failing,
   'window.closes': (p, f) => (p.failing === null ? `the window closes at ${clock(f, p.endAt)}, the end of the morning` : `the window closes at ${clock(f, p.endAt)}: ${failing(p.failing, f)}`),
   'miss.short': (p, f) => `${minutes(p.missingMinutes)} short: ${[p.opens, p.closes].filter((cause) => cause !== null).map((cause) => failing(cause, f)).join(', and ')}`,

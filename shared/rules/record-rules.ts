@@ -103,7 +103,7 @@ export const recordRuleSets = [
     madeWithin: { kind: 'sameDay' },
     kept: { years: 7, from: 'application' },
     items: { ...always('date', 'startTime', 'stopTime', 'windDirection', 'windSpeed', 'temperature', 'productName', 'registrationNumber', 'amount', 'concentration', 'crop', 'location', 'applicatorName'), map: 'aboveOneAcre', licenceNumber: 'whereRelevant', uncertifiedApplicator: 'whereRelevant' },
-    note: 'All certified applicators, and anyone who treats more than an acre of agricultural land a year. On the state’s form if it asks; the statute’s list is from memory.',
+    note: 'All certified applicators, and anyone who treats more than an acre of agricultural land a year. On the state’s form if it asks. Rule text last amended on 31 October 2025; the statute’s list is from memory.',
   },
   {
     id: 'us-tx',

@@ -12,7 +12,7 @@ describe('the work on a farm', () => {
   afterEach(() => expect(demo.faults()).toEqual([]));
 
   const openBlock = async (page: Page, name: string) => {
-    await page.goto(`${farmPathOf(page)}/farm`);
+    await page.goto(`${farmPathOf(page)}/settings`);
     await page.getByRole('link', { name: new RegExp(name) }).click();
     await page.getByRole('heading', { level: 1, name }).waitFor();
   };
@@ -22,7 +22,7 @@ describe('the work on a farm', () => {
 
   it('keeps what was typed into a new block, shows each problem beside its field, and saves it once it is right', async () => {
     const page = await demo.signedIn('owner', phone);
-    await page.goto(`${farmPathOf(page)}/farm`);
+    await page.goto(`${farmPathOf(page)}/settings`);
     await page.getByRole('link', { name: 'Add a block' }).click();
     await page.getByLabel('Crop').fill('Pear');
     await page.getByLabel(/^Area/).fill('half');
@@ -54,7 +54,7 @@ describe('the work on a farm', () => {
         ? route.fulfill({ status: 422, contentType: 'application/problem+json', body: JSON.stringify({ type: 'about:blank', title: 'Some entries need another look', status: 422, detail: 'Correct the entries named below.', problems: [{ path: 'areaHa', message: 'must be at most 1000 ha' }] }) })
         : route.continue(),
     );
-    await page.goto(`${farmPathOf(page)}/farm/blocks/new`);
+    await page.goto(`${farmPathOf(page)}/settings/blocks/new`);
     await page.getByLabel('Name', { exact: true }).fill('Far field');
     await page.getByLabel('Crop').fill('Apple');
     await page.getByLabel(/^Area/).fill('3');

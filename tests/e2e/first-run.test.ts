@@ -98,7 +98,7 @@ describe('a grower who is new', () => {
 
   it('meets a plain page where an address names nothing, or another farm', async () => {
     const page = await demo.signedIn('owner');
-    for (const address of ['/nowhere', '/farms/00000000-0000-4000-8000-000000000000', `${new URL(page.url()).pathname}/farm/blocks/00000000-0000-4000-8000-000000000000`]) {
+    for (const address of ['/nowhere', '/farms/00000000-0000-4000-8000-000000000000', `${new URL(page.url()).pathname}/settings/blocks/00000000-0000-4000-8000-000000000000`]) {
       await page.goto(address);
       await page.getByRole('heading', { level: 1, name: 'Nothing here' }).waitFor();
     }

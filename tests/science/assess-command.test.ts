@@ -4,7 +4,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import Ajv from 'ajv/dist/2020.js';
+import { Ajv2020 } from 'ajv/dist/2020.js';
 import addFormats from 'ajv-formats';
 import { afterAll, describe, expect, it } from 'vitest';
 import { answerSchema } from '../../shared/assessment/answer.ts';
@@ -98,7 +98,7 @@ describe('the assess command', () => {
     const { code, out } = await assessCommand(['--schema']);
     expect(code).toBe(0);
     const { $defs, ...caseJsonSchema } = JSON.parse(out) as Record<string, unknown> & { $defs: { answer: object } };
-    const ajv = addFormats.default(new Ajv.default({ strict: false, allErrors: true }));
+    const ajv = addFormats.default(new Ajv2020({ strict: false, allErrors: true }));
     const isCase = ajv.compile(caseJsonSchema);
     expect(isCase(rawCase({ limits: allLimits }))).toBe(true);
     expect(isCase(rawCase({ hours: [{ time: '2026-06-10T00:00:00Z', windSpeed10mMs: -3 }] }))).toBe(false);

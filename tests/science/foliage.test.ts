@@ -68,6 +68,13 @@ describe('wet leaves', () => {
     );
   });
 
+  it('are known again after an hour too cold for the formulas', () => {
+    const hours = damp();
+    hours[3] = { ...hours[3]!, temperature2mC: -55 };
+    expect(prepared(hours).at(Date.parse(hours[3]!.time)).wetness).toBeNull();
+    expect(prepared(hours).at(sunriseMs).wetness).toBeGreaterThan(0.8);
+  });
+
   it('count as wet after hours that were left out', () => {
     const whole = dry();
     const slot = slotOf(noonMs, whole);

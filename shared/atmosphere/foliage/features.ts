@@ -27,7 +27,7 @@ const clip = (value: number, low: number, high: number): number => (value < low 
 /**
  * Fills `into` with the features at the start of an hour and carries the film to its end. Where rain or humidity is not known the film
  * counts as full afterwards, so that a gap never dries leaves.
- * @returns false where temperature or humidity is not known
+ * @returns false where temperature or humidity is not known or outside of the formulas' validity
  */
 export function stepHour(hour: ForecastHour, altitudeDegAt: (epochMs: number) => number, epochMs: number, film: FilmConstants, moisture: Moisture, into: Float64Array): boolean {
   const temperatureC = hour.temperature2mC;
@@ -40,6 +40,10 @@ export function stepHour(hour: ForecastHour, altitudeDegAt: (epochMs: number) =>
   const sunWm2 = hour.shortwaveWm2 ?? sunOf(altitudeDegAt(epochMs + hourMs / 2), hour.cloudCoverPct);
   const weather = { temperatureC, vapourKpa: saturationVapourPressureKpa(Math.min(dewPointC, temperatureC)), windMs: hour.windSpeed10mMs ?? windWhenUnknownMs, sunWm2, cloud };
   const evaporation = evaporationMmPerHour(weather, film);
+  if (Number.isNaN(evaporation)) {
+    moisture.filmMm = film.rainMostMm;
+    return false;
+  }
   const depressionC = Math.max(0, temperatureC - dewPointC);
   const share = Math.min(1, moisture.filmMm / film.mostMm);
   into[0] = share;

@@ -3,7 +3,7 @@ import { blockBody, type Block } from '../../../../shared/api/farms.ts';
 import { NumberField, TextField } from '../../../lib/forms/fields.tsx';
 import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
-import { blocksApi } from '../../farm/api/blocks.ts';
+import { blocksApi } from '../../farms/api/blocks.ts';
 
 type Body = z.infer<typeof blockBody>;
 

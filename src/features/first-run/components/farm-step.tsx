@@ -5,7 +5,7 @@ import { NumberField, TextField } from '../../../lib/forms/fields.tsx';
 import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
 import { useMe } from '../../../lib/session/session.ts';
-import { useCreateFarm } from '../../farm/api/farm.ts';
+import { useCreateFarm } from '../../farms/api/farm.ts';
 
 type Body = z.infer<typeof farmBody>;
 

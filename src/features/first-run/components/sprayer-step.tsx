@@ -3,7 +3,7 @@ import { sprayerBody, type Sprayer } from '../../../../shared/api/farms.ts';
 import { NumberField, TextField } from '../../../lib/forms/fields.tsx';
 import { Fields, RecordForm } from '../../../lib/forms/record-form.tsx';
 import { useTypedForm } from '../../../lib/forms/use-typed-form.ts';
-import { sprayersApi } from '../../farm/api/sprayers.ts';
+import { sprayersApi } from '../../farms/api/sprayers.ts';
 
 type Body = z.infer<typeof sprayerBody>;
 
