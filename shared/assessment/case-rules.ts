@@ -31,6 +31,8 @@ export function crossFieldProblems(theCase: RuledCase): CrossFieldProblem[] {
 }
 
 function placeAndDateProblems({ site, date }: RuledCase): CrossFieldProblem[] {
+  // The schema has told of a text that is no date; it still runs the rules between fields.
+  if (Number.isNaN(Date.parse(`${date}T00:00:00Z`))) return [];
   const problems: CrossFieldProblem[] = [];
   const year = Number(date.slice(0, 4));
   if (!(year >= firstYear && year <= lastYear)) problems.push({ path: ['date'], message: `must lie between the years ${firstYear} and ${lastYear}` });

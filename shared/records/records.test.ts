@@ -91,7 +91,6 @@ describe('a farm’s chain of signed records', () => {
 describe('canonical JSON', () => {
   it('sorts keys as RFC 8785, §3.2.3 shows', () => {
     const sorted = canonicalJson({ '\u20ac': 'Euro Sign', '\r': 'Carriage Return', '\ufb33': 'Hebrew Letter Dalet With Dagesh', '1': 'One', '\ud83d\ude00': 'Emoji: Grinning Face', '\u0080': 'Control', '\u00f6': 'Latin Small Letter O With Diaeresis' });
-    expect(Object.values(JSON.parse(sorted) as Record<string, string>).toSorted()).toHaveLength(7);
     expect([...sorted.matchAll(/:"([^"]+)"/g)].map(([, value]) => value)).toEqual(['Carriage Return', 'One', 'Control', 'Latin Small Letter O With Diaeresis', 'Euro Sign', 'Emoji: Grinning Face', 'Hebrew Letter Dalet With Dagesh']);
   });
 

@@ -2,9 +2,10 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { calibrationState, walkingPaceMs, type Calibration } from './calibration.ts';
 import { crewTime, savings, type CrewPace } from './crew-time.ts';
-import { learnedMinutes, learnedPace, quantile, type PastRun } from './learned-minutes.ts';
+import { learnedMinutes, learnedPace, type PastRun } from './learned-minutes.ts';
 import { jobOfPlan } from './minutes.ts';
 import { mixingOrder } from './mixing-order.ts';
+import { quantile } from './quantile.ts';
 
 const alone: CrewPace = { sprayMinutesPerTank: 4.5, walkMinutes: 1, pourMinutes: 0.5, swapMinutes: 0.25, mixMinutes: 3, crew: 'alone', packs: 1 };
 

@@ -1,3 +1,5 @@
+import { quantile } from './quantile.ts';
+
 /** What one past run took, from its field record. */
 export interface PastRun {
   /** Local date, `YYYY-MM-DD`. */
@@ -28,16 +30,6 @@ export interface LearnedPace {
 export const learnedFromRuns = 3;
 /** Only the newest runs count: people and engines change. Common practice, no source. */
 export const learnedFromNewest = 20;
-
-/** Quantile by linear interpolation between order statistics (type 7) [hyndmanFan1996]. @returns NaN of nothing */
-export function quantile(values: readonly number[], share: number): number {
-  if (values.length === 0) return NaN;
-  const sorted = values.toSorted((a, b) => a - b);
-  const at = (sorted.length - 1) * share;
-  const below = sorted[Math.floor(at)]!;
-  const above = sorted[Math.ceil(at)]!;
-  return below + (above - below) * (at - Math.floor(at));
-}
 
 const spreadOf = (values: readonly number[]): Spread => ({ typical: quantile(values, 0.5), low: quantile(values, 0.1), high: quantile(values, 0.9) });
 const mean = (values: readonly number[]): number => values.reduce((sum, value) => sum + value, 0) / values.length;

@@ -95,7 +95,7 @@ export function Router() {
                 <Route path=":id" element={<ProductPage />} />
                 <Route path=":id/edit" element={<EditProductPage />} />
               </Route>
-              <Route path="farm">
+              <Route path="settings">
                 <Route index element={<FarmPage />} />
                 <Route path="edit" element={<EditFarmPage />} />
                 <Route path="blocks/new" element={<NewBlockPage />} />
