@@ -116,8 +116,13 @@ function bindingOf({ chosen, enoughToTell, tracks, least, leastTrack, isUntold, 
   }
   if (morning.morning.count * stepMinutes < neededMinutes || morning.morning.count === 0) return 'time';
   const longest = longestRun(runs);
-  if (longest) return nameOf(longest.to < least.length ? longest.to : longest.from - 1) ?? 'time';
-  return shutTrack(tracks)?.limit ?? nameOf(highestStep(least));
+  if (longest) {
+    // What closes the window binds; a close that cannot be told leaves it to what opened the window.
+    const edges = [longest.to, longest.from - 1].filter((step) => step >= 0 && step < least.length);
+    if (edges.length === 0) return 'time';
+    return nameOf(edges.find((step) => isUntold[step] === 0) ?? edges[0]!);
+  }
+  return shutTrack(tracks)?.limit ?? nameOf(highestToldStep(least, isUntold));
 }
 
 /** Of the hard limits that fail in every step, the one that comes least near; null when none does. */
@@ -143,6 +148,13 @@ export function lowestStep(least: Float64Array, from: number, to: number): numbe
   let lowest = from;
   for (let step = from + 1; step < to; step += 1) if (least[step]! < least[lowest]!) lowest = step;
   return lowest;
+}
+
+/** The step that comes nearest to open among those that are known to be closed; any step when none is. */
+function highestToldStep(least: Float64Array, isUntold: Uint8Array): number {
+  let highest = -1;
+  for (let step = 0; step < least.length; step += 1) if (isUntold[step] === 0 && (highest < 0 || least[step]! > least[highest]!)) highest = step;
+  return Math.max(0, highest);
 }
 
 export function highestStep(least: Float64Array): number {

@@ -38,7 +38,7 @@ function mutate(value: Json): void {
     const change = random();
     if (change < 0.7) (holder as Record<string, Json>)[key] = structuredClone(pick(hostile));
     else if (change < 0.85) delete (holder as Record<string, Json>)[key];
-    else if (!Array.isArray(holder)) (holder as Record<string, Json>)[pick(['extra', 'toString', 'length', 'hours', 'verdict'])] = structuredClone(pick(hostile));
+    else if (!Array.isArray(holder)) (holder as Record<string, Json>)[pick(['extra', 'toString', 'constructor', 'hours', 'verdict'])] = structuredClone(pick(hostile));
     return;
   }
 }

@@ -7,7 +7,9 @@ import { prepareInversion } from '../../shared/atmosphere/inversion/index.ts';
 import { dryingMornings } from '../validation/drying.ts';
 import { fieldSite, fieldSunAltitudeDegAt, hasField } from '../validation/field.ts';
 import { acrossMonths, fitInversion, rowsOf } from '../validation/fitting.ts';
-import { foliageAcrossMonths, foliageHours, foliageRows, isJudged } from '../validation/foliage-fitting.ts';
+import { errorInLightWind, hasPairs, underForecastError } from '../validation/forecast-error.ts';
+import { judgedOf, referenceRecipe, rowsWithoutForesight, type Judged } from '../validation/inversion-checks.ts';
+import { fitFoliage, foliageAcrossMonths, foliageHours, foliageRows, isJudged, logitOfRow } from '../validation/foliage-fitting.ts';
 import { logistic } from '../validation/logistic.ts';
 import { hasMast, isMorning, loadMast, mastSite, mastSunAltitudeDegAt } from '../validation/mast.ts';
 import { reliability, scoresOf } from '../validation/scores.ts';
@@ -32,6 +34,34 @@ describe('the inversion estimate at the mast', () => {
     expect(scoresOf(chances, said.map(({ row }) => row.hour.differenceC > 1)).area).toBeGreaterThan(0.89);
     for (const tenth of reliability(chances, happened).filter(({ hours }) => hours >= 50)) expect(Math.abs(tenth.said - tenth.happened)).toBeLessThan(0.08);
   });
+
+  const scoresOfJudged = (judged: readonly Judged[]) => scoresOf(judged.map(({ likelihood }) => likelihood), judged.map(({ hour }) => hour.differenceC > 0.1));
+
+  it('is as good where nothing after the judged hour is seen', (context) => {
+    if (!hasMast()) return context.skip('../shared/data/mast_lovett is not here');
+    const { hours, area, skill } = scoresOfJudged(judgedOf(rowsWithoutForesight(loadMast())));
+    expect(hours).toBeGreaterThan(850);
+    expect(area).toBeGreaterThan(0.92);
+    expect(skill).toBeGreaterThan(0.55);
+  });
+
+  it('beats the recipe of the catalogue on the same months', (context) => {
+    if (!hasMast()) return context.skip('../shared/data/mast_lovett is not here');
+    const months = loadMast();
+    const [ours, recipe] = [scoresOfJudged(judgedOf(rowsOf(months))), scoresOfJudged(referenceRecipe(months))];
+    expect(ours.area).toBeGreaterThan(recipe.area + 0.02);
+    expect(ours.skill).toBeGreaterThan(recipe.skill + 0.05);
+  });
+
+  it('loses much of its worth to a forecast\'s error in light wind, and still beats climatology', (context) => {
+    if (!hasMast() || !hasPairs()) return context.skip('../shared/data/mast_lovett or forecast_pairs_meps is not here');
+    const [asMeasured, ...disturbed] = underForecastError(loadMast(), errorInLightWind());
+    for (const { area, skill } of disturbed) {
+      expect(area).toBeLessThan(asMeasured!.area);
+      expect(area).toBeGreaterThan(0.8);
+      expect(skill).toBeGreaterThan(0.2);
+    }
+  }, 30_000);
 
   it('is what the coefficients in the repository say', (context) => {
     if (!hasMast()) return context.skip('../shared/data/mast_lovett is not here');
@@ -65,6 +95,17 @@ describe('the estimate of wet leaves at the crop field', () => {
     const errorsH = mornings.map(({ observedMs, saidMs }) => Math.abs(saidMs - observedMs) / 3_600_000).sort((a, b) => a - b);
     expect(mornings.length).toBeGreaterThan(100);
     expect(errorsH[Math.floor(errorsH.length / 2)]).toBeLessThan(0.75);
+  });
+
+  it('is still told on the days of the failed logger, as far as they say a humidity, though less well', (context) => {
+    if (!hasField()) return context.skip('../shared/data/field_goettingen is not here');
+    const hours = foliageHours();
+    const clean = foliageRows(hours, leafCoefficients.film);
+    const judged = foliageRows(hours, leafCoefficients.film, new Set()).filter(({ hour }) => isJudged(hour)).map((row) => ({ row, month: row.hour.month }));
+    const fits = new Map([...new Set(judged.map(({ month }) => month))].map((month) => [month, fitFoliage(clean.filter(({ hour }) => hour.month !== month))]));
+    const area = scoresOf(judged.map(({ row, month }) => logistic(logitOfRow(fits.get(month)!, row.features))), judged.map(({ row }) => row.isWet)).area;
+    expect(judged.length).toBeGreaterThan(1440);
+    expect(area).toBeGreaterThan(0.94);
   });
 
   it('stays as good through the assessment\'s own door without any cloud told', (context) => {

@@ -4,6 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { extensionRules } from '../../shared/atmosphere/inversion/extension-rules.ts';
 import { featureNames, featureRules } from '../../shared/atmosphere/inversion/features.ts';
 import { coefficients } from '../../shared/atmosphere/inversion/coefficients.ts';
+import { inEnglish } from '../../shared/atmosphere/inversion/evidence.ts';
 import { prepareInversion } from '../../shared/atmosphere/inversion/index.ts';
 import type { ForecastHour } from '../../shared/assessment/case.ts';
 import { altitudeAt, clearCalm, dullWindy, likelihoodAt, sunriseMs } from './inversion-cases.ts';
@@ -73,10 +74,47 @@ describe('the likelihood of an inversion', () => {
     expect(aloft(-1)).toBeLessThan(likelihoodAt(clearCalm(), 1.5)!);
   });
 
-  it('is told with its evidence in plain words', () => {
-    const evidenceAt = (fromSunriseH: number): string[] => prepareInversion({ site, hours: clearCalm(), sunAltitudeDegAt: altitudeAt }).at(sunriseMs + fromSunriseH * 3_600_000).evidence;
-    expect(evidenceAt(-1)).toEqual(expect.arrayContaining(['clear and nearly calm through the night', 'the sun is not up yet', 'nearly calm now', 'an inversion of more than 1 °C is likely']));
-    expect(evidenceAt(0.4).join()).toMatch(/the sun stands 4° high.*2\.\d °C above the low/);
+  it('gives no stability class where wind is not known', () => expect(prepareInversion({ site, hours: clearCalm({ windSpeed10mMs: null }), sunAltitudeDegAt: altitudeAt }).at(sunriseMs).stabilityClass).toBeNull());
+});
+
+describe('the evidence of an inversion', () => {
+  const at = (hours: readonly ForecastHour[], fromSunriseH: number, units?: 'us' | 'metric') => prepareInversion({ site, hours, sunAltitudeDegAt: altitudeAt, units }).at(sunriseMs + fromSunriseH * 3_600_000);
+
+  it('is told in plain words', () => {
+    expect(at(clearCalm(), -1).evidence).toEqual(expect.arrayContaining(['clear and nearly calm through the night', 'the sun is not up yet', 'nearly calm now', 'an inversion of more than 1 °C is likely']));
+    expect(at(clearCalm(), 0.4).evidence.join()).toMatch(/sun up 24 minutes.*2\.\d °C above the low/);
+    expect(at(clearCalm(), 4).evidence).toContain(`the sun stands ${Math.round(altitudeAt(sunriseMs + 4 * 3_600_000))}° high`);
+  });
+
+  it('is told in US units to who reads those', () => {
+    const warmAloft = clearCalm().map((hour) => ({ ...hour, temperature80mC: hour.temperature2mC! + 2 }));
+    expect(at(warmAloft, 0.4, 'us').evidence).toContain('3.6 °F warmer at 260 ft than near the ground');
+    expect(at(warmAloft, 0.4, 'us').evidence.join()).not.toMatch(/°C| m /);
+    expect(at(warmAloft, 0.4).evidence).toContain('2.0 °C warmer at 80 m than near the ground');
+  });
+
+  it('comes as keys and SI figures too, for other languages', () => {
+    const messages = at(clearCalm(), 0.4).messages;
+    expect(messages).toEqual(expect.arrayContaining([{ key: 'night', params: { sky: 'clear', air: 'nearlyCalm' } }, { key: 'sunUp', params: { minutes: 24 } }]));
+    expect(messages.map((message) => inEnglish(message, 'metric'))).toEqual(at(clearCalm(), 0.4).evidence);
+  });
+
+  it.each([
+    ['wind', clearCalm({ windSpeed10mMs: null }), -0.5],
+    ['sky', clearCalm({ cloudCoverPct: null }), -0.5],
+    ['hours', clearCalm(), 400],
+    ['hours', [], 0],
+  ] as const)('names what is missing, the %s, where nothing can be said', (missing, hours, fromSunriseH) => {
+    const { likelihood, messages } = at(hours, fromSunriseH);
+    expect(likelihood).toBeNull();
+    expect(messages).toEqual([{ key: 'needs', params: { missing } }]);
+  });
+
+  it('names the gap also where only the hour after the instant has one', () => {
+    const hours = clearCalm();
+    const next = Math.ceil((sunriseMs - Date.parse(hours[0]!.time)) / 3_600_000);
+    hours[next] = { ...hours[next]!, windSpeed10mMs: null };
+    expect(at(hours, 0).messages).toEqual([{ key: 'needs', params: { missing: 'wind' } }]);
   });
 });
 

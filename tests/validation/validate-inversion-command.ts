@@ -1,11 +1,13 @@
 /** `npm run validate:inversion`: how good the inversion estimate is, on months it was not fitted on and on other records. */
-import { mkdirSync, writeFileSync } from 'node:fs';
 import { extensionRules } from '../../shared/atmosphere/inversion/extension-rules.ts';
 import { coefficients } from '../../shared/atmosphere/inversion/coefficients.ts';
 import { acrossMonths, rowsOf, type Said } from './fitting.ts';
+import { hoursCsv, reliabilityCsv, reliabilitySvg, writeFigure } from './figures.ts';
+import { errorInLightWind, hasPairs, underForecastError } from './forecast-error.ts';
+import { intervalsByDay, judgedOf, referenceRecipe, rowsWithoutForesight, withInnerChoice, type Interval, type Judged } from './inversion-checks.ts';
 import { lowLayerOfField, wellMixedMorning } from './inversion-elsewhere.ts';
 import { hasMast, loadMast, type MastHour } from './mast.ts';
-import { markdown, reliability, scoresOf, type Tenth } from './scores.ts';
+import { markdown, reliability, rocArea, scoresOf, type Tenth } from './scores.ts';
 
 const fixed = (value: number, digits = 3): string => (Number.isFinite(value) ? value.toFixed(digits) : '–');
 const percent = (value: number): string => (Number.isFinite(value) ? `${Math.round(100 * value)} %` : '–');
@@ -72,6 +74,31 @@ function rulesTable(said: readonly Said[], months: ReadonlyMap<number, readonly 
   );
 }
 
+/** How far the headline may be trusted: the same hours judged in stricter ways, and the catalogue's recipe beside it. */
+function checksTable(months: ReadonlyMap<number, readonly MastHour[]>, said: readonly Said[]): string {
+  const headline = said.map(({ row, likelihood }) => ({ hour: row.hour, likelihood }));
+  const line = (name: string, judged: readonly Judged[]): (string | number)[] => {
+    const chances = judged.map(({ likelihood }) => likelihood);
+    const { hours, area, skill } = scoresOf(chances, judged.map(({ hour }) => hour.differenceC > 0.1));
+    return [name, hours, fixed(area), fixed(skill), fixed(rocArea(chances, judged.map(({ hour }) => hour.differenceC > 1)))];
+  };
+  const within = ({ low, high }: Interval): string => `${fixed(low)} to ${fixed(high)}`;
+  const { area, skill, strongArea, days } = intervalsByDay(headline);
+  return markdown(['judged how', 'hours', 'ROC area > 0.1 °C', 'skill', 'ROC area > 1 °C'], [
+    line('as above', headline),
+    [`95 % interval, drawing ${days} whole days`, '', within(area), within(skill), within(strongArea)],
+    line('nothing after the judged hour seen', judgedOf(rowsWithoutForesight(months))),
+    line('ridge and importance too chosen without the month', withInnerChoice(rowsOf(months))),
+    line('the reference recipe on these months (0.88 and 0.41 on the months held back)', referenceRecipe(months)),
+  ]);
+}
+
+function forecastErrorTable(months: ReadonlyMap<number, readonly MastHour[]>): string {
+  const size = errorInLightWind();
+  const rows = underForecastError(months, size).map(({ name, area, skill, strongArea, wrong, ruleWrong }) => [name, fixed(area), fixed(skill), fixed(strongArea), percent(wrong), percent(ruleWrong)]);
+  return `Size from ${size.pairs} pairs in light wind, leads 9–24 h: wind spread ${fixed(size.windSpreadMs, 2)} m/s, bias ${fixed(size.windBiasMs, 2)} m/s, temperature spread ${fixed(size.temperatureSpreadC, 2)} °C.\n\n${markdown(['error laid on the measured hours', 'ROC area > 0.1 °C', 'skill', 'ROC area > 1 °C', 'wrong at 50 %', 'wrong by "wind or 3 °F"'], rows)}`;
+}
+
 if (hasMast()) {
   const months = loadMast();
   const said = acrossMonths(rowsOf(months));
@@ -85,10 +112,18 @@ if (hasMast()) {
   })));
   for (const { name, above, chance } of kinds) {
     say(`\n### Reliability, ${name}\n`);
-    say(markdown(['said', 'hours', 'mean said', 'happened', 'difference'], reliability(said.map(chance), said.map(({ row }) => row.hour.differenceC > above)).map(tenthRow)));
+    const tenths = reliability(said.map(chance), said.map(({ row }) => row.hour.differenceC > above));
+    say(markdown(['said', 'hours', 'mean said', 'happened', 'difference'], tenths.map(tenthRow)));
+    writeFigure(`inversion-reliability-${above}.csv`, reliabilityCsv(tenths));
+    writeFigure(`inversion-reliability-${above}.svg`, reliabilitySvg(`Inversion ${name}`, tenths));
+    writeFigure(`inversion-hours-${above}.csv`, hoursCsv(said.map((one) => ({ at: one.row.hour.hour.time, said: chance(one), happened: one.row.hour.differenceC > above }))));
   }
   say('\n### By hour from sunrise\n');
   say(byHourTable(said));
+  say('\n### How far to trust it\n');
+  say(checksTable(months, said));
+  say('\n### With a forecast\'s error on wind, temperature and cloud (all else above is on measured values)\n');
+  say(hasPairs() ? forecastErrorTable(months) : 'skipped: ../shared/data/forecast_pairs_meps is not here');
   say('\n### Published rules of thumb on the same hours, > 0.1 °C\n');
   say(rulesTable(said, months));
 } else say('skipped: ../shared/data/mast_lovett is not here');
@@ -96,5 +131,4 @@ if (hasMast()) {
 say('\n## Other records in the folder\n');
 say(lowLayerOfField() ?? 'skipped: ../shared/data/field_goettingen is not here');
 say(wellMixedMorning() ?? 'skipped: ../shared/data/mast_nrel_m2_day is not here');
-mkdirSync('.data/validation', { recursive: true });
-writeFileSync('.data/validation/inversion.md', `${lines.join('\n')}\n`);
+writeFigure('inversion.md', `${lines.join('\n')}\n`);

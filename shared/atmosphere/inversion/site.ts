@@ -61,10 +61,12 @@ export function learnSite(readings: readonly InversionReading[]): LearnedSite {
   }
   const inverted = usable.filter(({ isInverted }) => isInverted).length;
   const expected = usable.reduce((sum, { likelihood }) => sum + likelihood, 0);
-  return { logitOffset: offset, readings: usable.length, inverted, expected, words: wordsOf(usable.length, inverted, expected, offset) };
+  const learned = { logitOffset: offset, readings: usable.length, inverted, expected };
+  return { ...learned, words: siteWords(learned) };
 }
 
-function wordsOf(count: number, inverted: number, expected: number, offset: number): string {
+/** "Your site so far" in English. */
+export function siteWords({ readings: count, inverted, expected, logitOffset: offset }: Omit<LearnedSite, 'words'>): string {
   if (count === 0) return 'your site so far: no readings yet';
   const seen = `your site so far: inverted in ${inverted} of ${count} reading${count === 1 ? '' : 's'}, ${expected.toFixed(1)} expected`;
   if (Math.abs(offset) < 0.15) return `${seen}; the estimate stays as it is`;
