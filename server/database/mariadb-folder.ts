@@ -35,7 +35,7 @@ export async function layOut(dataFolder: string): Promise<void> {
   }
 }
 
-function install(folder: string): Promise<void> {
+function installOnce(folder: string): Promise<void> {
   const { username } = userInfo();
   // root may come in through the socket only, and only as the system's user.
   // The script stumbles over spaces in a path: it gets the folder's own name and is run beside it.
@@ -51,9 +51,23 @@ function install(folder: string): Promise<void> {
       if (error.code === 'ENOENT') reject(notInstalled());
       else if (saysDiskFull(output)) reject(new SetupError('The disk is full: the database could not be laid out; make room and start again.'));
       else if (/Permission denied|Errcode: 13/i.test(output)) reject(new SetupError(`No right to lay out the database in ${folder}: start as a user who may write there, or set DAWNVANE_DATA to another folder.`));
-      else reject(new SetupError(`The database could not be laid out in ${folder}: ${lastLine(output.split('\n').filter((line) => /error|cannot|fatal/i.test(line)).join('\n') || output)}`));
+      else reject(new SetupError(`The database could not be laid out in ${folder}: ${lastLine(output.split('\n').filter((line) => /error|cannot|fatal/i.test(line) && !/Aborting/.test(line)).join('\n') || output)}`, passingExitCode));
     });
   });
+}
+
+/** Marks a failure that names no lasting cause. */
+const passingExitCode = 75;
+
+/** Lays the folder out; a failure without a lasting cause (many databases starting at one time) is tried once more. */
+async function install(folder: string): Promise<void> {
+  try {
+    await installOnce(folder);
+  } catch (error) {
+    if (!(error instanceof SetupError) || error.exitCode !== passingExitCode) throw error;
+    await new Promise((resolve) => setTimeout(resolve, 1000));
+    await installOnce(folder);
+  }
 }
 
 export const notInstalled = (): SetupError => new SetupError('MariaDB is not installed; as root, type: apt-get update && apt-get install -y mariadb-server');
