@@ -7,7 +7,7 @@ import { stepMs } from './morning.ts';
 import type { PreparedMorning } from './prepare.ts';
 import { reasonsOf } from './reasons.ts';
 import { sentenceOf, type Language } from './sentences.ts';
-import type { Track } from './track.ts';
+import { boundAt, type Track } from './track.ts';
 import type { Judgement } from './verdict.ts';
 
 /** In which words the reasons are told; any other can be had from their key and params by `retell`. */
@@ -26,7 +26,8 @@ const rounded = (value: number): number | null => (Number.isNaN(value) ? null : 
 export function answerOf(judgement: Judgement, options: AnswerOptions = {}): AssessmentAnswer {
   const { morning } = judgement;
   const { morning: layout } = morning;
-  const formats = formatsFor({ units: options.units ?? 'us', timeZone: layout.site.timeZone, date: layout.date });
+  const units = options.units ?? 'us';
+  const formats = formatsFor({ units, timeZone: layout.site.timeZone, date: layout.date });
   const told = reasonsOf(judgement).map((bare): Reason => ({ limit: bare.limit, kind: bare.kind, at: bare.at, text: sentenceOf(bare, formats, options.language), key: bare.key, params: bare.params as Record<string, unknown> }));
   // Two limits may want for the same value: it is said once.
   const reasons = told.filter(({ text, kind }, index) => told.findIndex((other) => other.text === text && other.kind === kind) === index);
@@ -41,7 +42,7 @@ export function answerOf(judgement: Judgement, options: AnswerOptions = {}): Ass
     beeActivity: bandsOf(judgement),
     siteWindFactor: morning.siteFactor,
     get steps() {
-      return (steps ??= stepsOf(judgement));
+      return (steps ??= stepsOf(judgement, units));
     },
   };
 }
@@ -68,15 +69,16 @@ function bandsOf({ plan, morning }: Judgement): NonNullable<AssessmentAnswer['be
   return bands;
 }
 
-function stepsOf(judgement: Judgement): AssessmentStep[] {
+function stepsOf(judgement: Judgement, units: UnitSystem): AssessmentStep[] {
   const { morning, tracks, plan } = judgement;
   const times = morning.morning.times();
+  const inversion = morning.inversionSteps(units);
   const kinds = plan.limits.pollinators?.kinds ?? [];
   const steps: AssessmentStep[] = [];
   for (let step = 0; step < morning.morning.count; step += 1) {
     const limits: AssessmentStep['limits'] = {};
     for (const track of tracks) limits[track.limit] = atStep(track, step);
-    steps.push({ time: times[step]!, sunAltitudeDeg: Math.round(morning.morning.sunAltitudeDeg[step]! * 1e4) / 1e4, limits, inversion: inversionAt(morning, step), pollinators: beesAt(morning, kinds, step) });
+    steps.push({ time: times[step]!, sunAltitudeDeg: Math.round(morning.morning.sunAltitudeDeg[step]! * 1e4) / 1e4, limits, inversion: inversion[step]!, pollinators: beesAt(morning, kinds, step) });
   }
   return steps;
 }
@@ -85,16 +87,10 @@ function atStep(track: Track, step: number): LimitAtStep {
   const headroom = track.headroom[step]!;
   return {
     value: rounded(track.value[step]!),
-    limit: rounded(typeof track.bound === 'number' ? track.bound : track.bound[step]!),
+    limit: rounded(boundAt(track, step)),
     headroom: Number.isNaN(headroom) ? null : Math.floor(headroom * headroomScale) / headroomScale,
     kind: track.isHard ? 'hard' : 'advice',
   };
-}
-
-/** Copied, so that the answer holds plain values. */
-function inversionAt(morning: PreparedMorning, step: number): AssessmentStep['inversion'] {
-  const { likelihood, stabilityClass, evidence } = morning.inversionAt(step);
-  return { likelihood, stabilityClass, evidence };
 }
 
 function beesAt(morning: PreparedMorning, kinds: readonly BeeKind[], step: number): AssessmentStep['pollinators'] {

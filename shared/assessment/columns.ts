@@ -18,6 +18,21 @@ export function column(length: number): Float64Array {
   return view;
 }
 
+let byteSlab = new Uint8Array(slabLength);
+let bytesUsed = 0;
+
+/** A zeroed column of small whole numbers (0–255), cut from a slab as `column` does. */
+export function byteColumn(length: number): Uint8Array {
+  if (length > slabLength / 4) return new Uint8Array(length);
+  if (bytesUsed + length > slabLength) {
+    byteSlab = new Uint8Array(slabLength);
+    bytesUsed = 0;
+  }
+  const view = byteSlab.subarray(bytesUsed, bytesUsed + length);
+  bytesUsed += length;
+  return view;
+}
+
 /** A new column made value by value; plain loops outrun typed-array `map` several times over. */
 export function mapColumn(values: Float64Array, change: (value: number) => number): Float64Array {
   const changed = column(values.length);

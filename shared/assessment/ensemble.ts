@@ -14,16 +14,20 @@ export interface Chance {
 }
 
 /**
- * Prepares every member of an ensemble; the sun is computed once for all.
+ * Prepares the members of an ensemble one by one as they are asked for; the sun is computed once for all. For a single plan this is
+ * the quicker way, as no member outlives its judgement.
  * @param members hours of each member, in order @param readings as for a single forecast
  */
-export function prepareEnsemble(site: Site, date: string, members: readonly (readonly ForecastHour[])[], readings: readonly Reading[] = []): PreparedMorning[] {
+export function* eachMember(site: Site, date: string, members: readonly (readonly ForecastHour[])[], readings: readonly Reading[] = []): Generator<PreparedMorning> {
   const morning = morningOf(site, date);
-  return members.map((hours) => prepareMorning({ site, date, hours, readings }, morning));
+  for (const hours of members) yield prepareMorning({ site, date, hours, readings }, morning);
 }
 
+/** Prepares every member of an ensemble, to judge several plans on; see `eachMember`. */
+export const prepareEnsemble = (...ensemble: Parameters<typeof eachMember>): PreparedMorning[] => [...eachMember(...ensemble)];
+
 /** Judges one plan on every member, by the same code that judges a single forecast. */
-export function chanceOf(members: readonly PreparedMorning[], plan: PlanToJudge): Chance {
+export function chanceOf(members: Iterable<PreparedMorning>, plan: PlanToJudge): Chance {
   let fit = 0;
   let told = 0;
   for (const member of members) {

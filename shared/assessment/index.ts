@@ -1,7 +1,7 @@
 /** The public door of the assessment: forecast hours in, a go or hold with its reasons out. */
 export { assess, judge } from './assess.ts';
 export type { AnswerOptions } from './answer-of.ts';
-export { chanceOf, prepareEnsemble, type Chance } from './ensemble.ts';
+export { chanceOf, eachMember, prepareEnsemble, type Chance } from './ensemble.ts';
 export { morningOf, type Morning } from './morning.ts';
 export { nextBetterMorning, type AssessedMorning, type BetterMorning } from './next-better-morning.ts';
 export { checkOnSite, type OnSite, type OnSiteFinding } from './on-site-check.ts';

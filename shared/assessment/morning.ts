@@ -37,6 +37,10 @@ export interface Morning {
   sunTimes(): AssessmentAnswer['sun'];
 }
 
+/** Mornings laid out lately, so that cases of one site and day share one sun. */
+const kept = new Map<string, Morning>();
+const mostKept = 64;
+
 /**
  * Lays out the morning of a date: from civil dawn to 12:00 on the local clock in steps of 5 minutes, the first on the first
  * full 5 minutes after civil dawn. Where the sun stays above −6° all night (polar day) the morning begins at local midnight;
@@ -45,12 +49,23 @@ export interface Morning {
  * @throws RangeError for an unknown zone
  */
 export function morningOf(site: Site, date: string): Morning {
+  const key = [site.latitude, site.longitude, site.elevationM, site.timeZone, site.exposure, date].join(' ');
+  let morning = kept.get(key);
+  if (!morning) {
+    if (kept.size >= mostKept) kept.clear();
+    kept.set(key, (morning = layOut(site, date)));
+  }
+  return morning;
+}
+
+function layOut(site: Site, date: string): Morning {
   const localNoonMs = localInstantMs(date, 720, site.timeZone);
   const midnightMs = localInstantMs(date, 0, site.timeZone);
   const sun = sunTimesNear(localNoonMs, site.latitude, site.longitude);
   const dawnMs = sun.civilDawnMs ?? (sunAltitudeDeg(sun.solarNoonMs, site.latitude, site.longitude) > -6 ? midnightMs : Infinity);
-  const startMs = Math.ceil(Math.max(dawnMs, midnightMs) / stepMs) * stepMs;
-  const count = startMs < localNoonMs ? Math.ceil((localNoonMs - startMs) / stepMs) : 0;
+  // Without a dawn before noon the morning is empty, and lies at noon.
+  const startMs = Math.ceil(Math.min(Math.max(dawnMs, midnightMs), localNoonMs) / stepMs) * stepMs;
+  const count = Math.max(0, Math.ceil((localNoonMs - startMs) / stepMs));
   const firstHourMs = count > 0 ? Math.floor(startMs / hourMs) * hourMs : Math.floor(localNoonMs / hourMs) * hourMs;
   const hourCount = count > 0 ? Math.ceil((startMs + count * stepMs - firstHourMs) / hourMs) : 0;
   const offsetSteps = count > 0 ? (startMs - firstHourMs) / stepMs : 0;

@@ -17,7 +17,7 @@ const lightHalfAngleDeg = 90;
 export interface DirectionSteps {
   /** Direction the wind comes from, degrees; NaN = unknown. */
   fromDeg: Float64Array;
-  /** Half-angle within which the wind may come, degrees; 180 = from anywhere. */
+  /** Half-angle within which the wind may come, degrees; 180 = from anywhere, NaN = unknown. */
   halfAngleDeg: Float64Array;
 }
 
@@ -32,22 +32,31 @@ export function halfAngleOf(windMs: number): number {
 export function prepareDirection(morning: Morning, table: HourTable, windMs: Float64Array): DirectionSteps {
   const fromDeg = column(morning.count).fill(NaN);
   const halfAngleDeg = column(morning.count);
-  let hourOfTurn = -1;
-  let turnDeg = 0;
+  const hourly = directionsByHour(morning, table);
   for (let step = 0; step < morning.count; step += 1) {
     const grid = step + morning.offsetSteps;
     const hour = Math.floor(grid / stepsPerHour);
     const share = (grid % stepsPerHour) / stepsPerHour;
-    const a = table.windFromDeg[hour]!;
-    const b = share === 0 ? a : table.windFromDeg[hour + 1]!;
-    if (hour !== hourOfTurn) {
-      hourOfTurn = hour;
-      turnDeg = 2 * directionMean([a, table.windFromDeg[hour + 1]!]).spreadDeg;
-    }
-    const east = (1 - share) * Math.sin(a * radPerDeg) + share * Math.sin(b * radPerDeg);
-    const north = (1 - share) * Math.cos(a * radPerDeg) + share * Math.cos(b * radPerDeg);
-    if (Math.hypot(east, north) > 1e-6) fromDeg[step] = (Math.atan2(east, north) / radPerDeg + 360) % 360;
-    halfAngleDeg[step] = Math.min(180, Math.max(halfAngleOf(windMs[step]!), Number.isNaN(turnDeg) ? 180 : turnDeg));
+    const next = share === 0 ? hour : hour + 1;
+    const east = (1 - share) * hourly.east[hour]! + share * hourly.east[next]!;
+    const north = (1 - share) * hourly.north[hour]! + share * hourly.north[next]!;
+    if (east * east + north * north > 1e-12) fromDeg[step] = (Math.atan2(east, north) / radPerDeg + 360) % 360;
+    const turnDeg = hourly.turnDeg[hour]!;
+    const halfAngle = halfAngleOf(windMs[step]!);
+    // Math.max passes an unknown turn on: what direction a wind that blows will have cannot be told.
+    halfAngleDeg[step] = halfAngle === 180 ? 180 : Math.min(180, Math.max(halfAngle, turnDeg));
   }
   return { fromDeg, halfAngleDeg };
+}
+
+/** Unit vector of each hour's direction, and twice the spread of the turn to the next hour, degrees. */
+function directionsByHour(morning: Morning, table: HourTable): { east: Float64Array; north: Float64Array; turnDeg: Float64Array } {
+  const hourly = { east: column(morning.hourCount + 1), north: column(morning.hourCount + 1), turnDeg: column(morning.hourCount + 1) };
+  for (let hour = 0; hour <= morning.hourCount; hour += 1) {
+    const from = table.windFromDeg[hour]!;
+    hourly.east[hour] = Math.sin(from * radPerDeg);
+    hourly.north[hour] = Math.cos(from * radPerDeg);
+    hourly.turnDeg[hour] = 2 * directionMean([from, table.windFromDeg[hour + 1]!]).spreadDeg;
+  }
+  return hourly;
 }

@@ -1,13 +1,17 @@
 import { prepareFoliage } from '../atmosphere/foliage/index.ts';
+import { inEnglish } from '../atmosphere/inversion/evidence.ts';
 import { prepareInversion } from '../atmosphere/inversion/index.ts';
+import type { LearnedSite } from '../atmosphere/inversion/site.ts';
 import { stationPressureKpa } from '../atmosphere/pressure.ts';
 import { radiationUnderCloudWm2 } from '../atmosphere/radiation/kasten-czeplak.ts';
 import { saturationVapourPressureKpa } from '../atmosphere/saturation-vapour-pressure.ts';
-import type { StabilityClass } from '../atmosphere/stability-turner.ts';
 import { deltaTC } from '../atmosphere/wet-bulb.ts';
+import { windProfileFactor } from '../atmosphere/wind-profile.ts';
+import type { UnitSystem } from '../units/units.ts';
+import type { AssessmentStep } from './answer.ts';
 import type { BeeKind, ForecastHour, Reading, Site } from './case.ts';
 import { cautiousHours, hoursAround } from './cautious-hours.ts';
-import { column } from './columns.ts';
+import { column, mapColumn } from './columns.ts';
 import { prepareBees, type BeeSteps } from './prepare-bees.ts';
 import { prepareDirection, type DirectionSteps } from './prepare-direction.ts';
 import { hourMs, tableOf, type HourTable } from './hours.ts';
@@ -20,11 +24,7 @@ const hoursAfterNoon = 73;
 const mostOverClearSky = 1.3;
 const stepsPerHour = hourMs / stepMs;
 
-export interface InversionStep {
-  likelihood: number | null;
-  stabilityClass: StabilityClass | null;
-  evidence: string[];
-}
+export type InversionStep = AssessmentStep['inversion'];
 
 /**
  * One morning's weather on 5-minute steps, ready to be judged by any number of plans. NaN = unknown.
@@ -37,6 +37,8 @@ export interface PreparedMorning {
   temperatureC: Float64Array;
   /** Wind at 10 m, with the site's learned factor. */
   windMs: Float64Array;
+  /** The same at another height, by the FAO-56 profile [fao56, eq. 47]; made once for all plans of that height. */
+  windAtMs(heightM: number): Float64Array;
   /** Gust at 10 m: the hour's greatest, at least the mean wind. A site factor above 1 raises it, one below 1 does not lower it. */
   gustMs: Float64Array;
   direction: DirectionSteps;
@@ -44,8 +46,8 @@ export interface PreparedMorning {
   radiationWm2: Float64Array;
   /** Steps whose radiation was estimated from the sun's altitude and cloud [kastenCzeplak1980]. */
   radiationIsEstimated: boolean;
-  /** Inversion at a step as the forecast shows it. */
-  inversionAt(step: number): InversionStep;
+  /** Inversion at every step as the forecast shows it, its evidence in a person's units; made once for all plans. */
+  inversionSteps(units: UnitSystem): readonly InversionStep[];
   /** As judged: gaps in the forecast are taken for the weather that makes inversions and wet leaves. */
   inversionLikelihood: Float64Array;
   foliageWetness: Float64Array;
@@ -61,6 +63,8 @@ export interface Weather {
   /** In order, one per hour, start of hour in UTC. */
   hours: readonly ForecastHour[];
   readings?: readonly Reading[];
+  /** What hang tests and two-height readings have taught about inversions here. */
+  learned?: LearnedSite;
 }
 
 /** Interpolates an hourly state onto the steps; unknown wherever one of the two hours is. */
@@ -88,13 +92,14 @@ export function prepareMorning(weather: Weather, morning: Morning = morningOf(we
   const temperatureC = onSteps(morning, table.temperatureC);
   const windMs = onSteps(morning, table.windMs, siteFactor?.factor ?? 1);
   const sky = radiationOnSteps(morning, table);
-  const night = nightOnSteps(morning, hoursAround(hours, morning.startMs));
+  const night = nightOnSteps(morning, hoursAround(hours, morning.startMs), weather.learned);
   return {
     morning,
     hours: table,
     siteFactor,
     temperatureC,
     windMs,
+    windAtMs: windAtHeights(windMs),
     gustMs: gustsOnSteps(morning, table, windMs, siteFactor),
     direction: prepareDirection(morning, table, windMs),
     deltaTC: deltaTOnSteps(morning, table, temperatureC),
@@ -105,23 +110,41 @@ export function prepareMorning(weather: Weather, morning: Morning = morningOf(we
   };
 }
 
-type Night = Pick<PreparedMorning, 'inversionAt' | 'inversionLikelihood' | 'foliageWetness' | 'foliageDriesAt'>;
+function windAtHeights(windMs: Float64Array): (heightM: number) => Float64Array {
+  const known = new Map<number, Float64Array>();
+  return (heightM) => {
+    let wind = known.get(heightM);
+    if (!wind) {
+      const factor = windProfileFactor(10, heightM);
+      known.set(heightM, (wind = mapColumn(windMs, (speedMs) => speedMs * factor)));
+    }
+    return wind;
+  };
+}
+
+type Night = Pick<PreparedMorning, 'inversionSteps' | 'inversionLikelihood' | 'foliageWetness' | 'foliageDriesAt'>;
 
 /** Inversion and wet leaves on the steps; where the forecast has gaps the judged values are those of the worst weather in the gaps. */
-function nightOnSteps(morning: Morning, hours: readonly ForecastHour[]): Night {
+function nightOnSteps(morning: Morning, hours: readonly ForecastHour[], learned: LearnedSite | undefined): Night {
   const { site, sunAltitudeDegAt } = morning;
-  const inversion = prepareInversion({ site, hours, sunAltitudeDegAt });
+  const inversion = prepareInversion({ site, hours, sunAltitudeDegAt, learned });
   const foliage = prepareFoliage({ site, hours, sunAltitudeDegAt });
   const inversionLikelihood = onTimes(morning, (ms) => inversion.at(ms).likelihood);
   const foliageWetness = onTimes(morning, (ms) => foliage.at(ms).wetness);
   const filled = cautiousHours(hours, sunAltitudeDegAt);
   if (filled) {
-    const worstInversion = prepareInversion({ site, hours: filled, sunAltitudeDegAt });
+    const worstInversion = prepareInversion({ site, hours: filled, sunAltitudeDegAt, learned });
     const worstFoliage = prepareFoliage({ site, hours: filled, sunAltitudeDegAt });
     raise(inversionLikelihood, onTimes(morning, (ms) => worstInversion.at(ms).likelihood));
     raise(foliageWetness, onTimes(morning, (ms) => worstFoliage.at(ms).wetness));
   }
-  return { inversionAt: (step) => inversion.at(morning.startMs + step * stepMs), inversionLikelihood, foliageWetness, foliageDriesAt: (afterMs) => foliage.driesAt(afterMs) };
+  const steps: Partial<Record<UnitSystem, InversionStep[]>> = {};
+  const stepsIn = (units: UnitSystem): InversionStep[] =>
+    Array.from(morning.stepStartsMs(), (ms) => {
+      const { likelihood, stabilityClass, messages } = inversion.at(ms);
+      return { likelihood, stabilityClass, evidence: messages.map((message) => inEnglish(message, units)) };
+    });
+  return { inversionSteps: (units) => (steps[units] ??= stepsIn(units)), inversionLikelihood, foliageWetness, foliageDriesAt: (afterMs) => foliage.driesAt(afterMs) };
 }
 
 function onTimes(morning: Morning, at: (epochMs: number) => number | null): Float64Array {

@@ -1,10 +1,13 @@
 import { limitNames, type LimitName } from './answer.ts';
-import { column } from './columns.ts';
+import { byteColumn, column } from './columns.ts';
 import { limitJudges } from './limits/index.ts';
 import type { PreparedMorning } from './prepare.ts';
 import type { PlanToJudge, Track } from './track.ts';
 import { stepMinutes } from './morning.ts';
 import { betterFit, fitInto, minutesOf, runsOf, type Fit, type StepRun } from './windows.ts';
+
+/** Stands for no track in `leastTrack`. */
+const noTrack = 255;
 
 /** A judged plan in compact form: what the answer, its sentences and an ensemble's count are made from. */
 export interface Judgement {
@@ -14,8 +17,8 @@ export interface Judgement {
   tracks: Track[];
   /** Least headroom of the hard limits per step; −2 where none is told. */
   least: Float64Array;
-  /** Index of the track with the least headroom per step; −1 where none is told. */
-  leastTrack: Int8Array;
+  /** Index of the track with the least headroom per step; `noTrack` where none is told. */
+  leastTrack: Uint8Array;
   /** 1 where a hard limit cannot be told and none is known to fail. */
   isUntold: Uint8Array;
   runs: StepRun[];
@@ -41,9 +44,9 @@ export function decide(morning: PreparedMorning, plan: PlanToJudge): Judgement {
   }
   const count = morning.morning.count;
   const least = column(count);
-  const leastTrack = new Int8Array(count).fill(-1);
-  const isUntold = new Uint8Array(count);
-  const isOpen = new Uint8Array(count);
+  const leastTrack = byteColumn(count).fill(noTrack);
+  const isUntold = byteColumn(count);
+  const isOpen = byteColumn(count);
   const hasHardTrack = scan(tracks, least, leastTrack, isUntold);
   for (let step = 0; step < count; step += 1) isOpen[step] = hasHardTrack && isUntold[step] === 0 && least[step]! >= 0 ? 1 : 0;
   const neededMinutes = plan.minutesNeeded + plan.reserveMinutes;
@@ -58,7 +61,7 @@ export function decide(morning: PreparedMorning, plan: PlanToJudge): Judgement {
 }
 
 /** Fills least headroom and unknown steps from the hard limits; false when no limit is hard. */
-function scan(tracks: Track[], least: Float64Array, leastTrack: Int8Array, isUntold: Uint8Array): boolean {
+function scan(tracks: Track[], least: Float64Array, leastTrack: Uint8Array, isUntold: Uint8Array): boolean {
   let hasHard = false;
   least.fill(Infinity);
   for (const [index, track] of tracks.entries()) {
@@ -83,7 +86,7 @@ function scan(tracks: Track[], least: Float64Array, leastTrack: Int8Array, isUnt
 
 /** Steps in which a limit that does not hold is passed all the same. */
 function stepsAgainstAdvice(tracks: readonly Track[], count: number): Uint8Array {
-  const against = new Uint8Array(count);
+  const against = byteColumn(count);
   for (const track of tracks) {
     if (track.isHard) continue;
     for (let step = 0; step < count; step += 1) if (track.headroom[step]! < 0) against[step] = 1;
@@ -93,7 +96,7 @@ function stepsAgainstAdvice(tracks: readonly Track[], count: number): Uint8Array
 
 /** True when the job would fit if every unknown step were open. */
 function couldFit(least: Float64Array, isUntold: Uint8Array, neededMinutes: number): boolean {
-  const isPossible = new Uint8Array(least.length);
+  const isPossible = byteColumn(least.length);
   let unknowns = 0;
   for (let step = 0; step < least.length; step += 1) {
     unknowns += isUntold[step]!;

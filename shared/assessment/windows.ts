@@ -1,3 +1,4 @@
+import { column } from './columns.ts';
 import { stepMinutes } from './morning.ts';
 
 /** A run of open steps: step numbers, the end excluded. */
@@ -42,7 +43,7 @@ const roomEnough = 0.15;
 
 /** Least headroom over the job for each start of a run, by a sliding window with a queue of rising candidates. */
 function lowestByStart(run: StepRun, least: Float64Array, covered: number): Float64Array {
-  const lowest = new Float64Array(run.to - run.from - covered + 1);
+  const lowest = column(run.to - run.from - covered + 1);
   const queue: number[] = [];
   let head = 0;
   for (let step = run.from; step < run.to; step += 1) {

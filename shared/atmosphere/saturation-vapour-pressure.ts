@@ -1,7 +1,7 @@
-import { within } from './validity.ts';
-
 /** The Magnus form serves −40..60 °C over (supercooled) water. */
-export const saturationValidity = { temperatureC: [-40, 60] } as const;
+const leastC = -40;
+const mostC = 60;
+export const saturationValidity = { temperatureC: [leastC, mostC] } as const;
 
 /**
  * Saturation vapour pressure over water [fao56, eq. 11].
@@ -9,7 +9,7 @@ export const saturationValidity = { temperatureC: [-40, 60] } as const;
  * @returns kPa; NaN outside the validity
  */
 export function saturationVapourPressureKpa(temperatureC: number): number {
-  if (!within(temperatureC, saturationValidity.temperatureC)) return NaN;
+  if (!(temperatureC >= leastC && temperatureC <= mostC)) return NaN;
   return 0.6108 * Math.exp((17.27 * temperatureC) / (temperatureC + 237.3));
 }
 

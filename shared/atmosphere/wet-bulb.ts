@@ -17,7 +17,7 @@ export function wetBulbC(temperatureC: number, vapourPressureKpa: number, pressu
   const saturated = saturationVapourPressureKpa(temperatureC);
   if (vapourPressureKpa >= saturated) return temperatureC;
   const ratio = (0.621945 * vapourPressureKpa) / (pressureKpa - vapourPressureKpa);
-  // First guess from the plain psychrometer line; two or three steps then reach 1e-4 °C.
+  // First guess from the plain psychrometer line; one or two steps then reach 1e-4 °C.
   let wet = guessC;
   if (!(wet <= temperatureC)) wet = temperatureC - (saturated - vapourPressureKpa) / ((4098 * saturated) / (temperatureC + 237.3) ** 2 + 0.000662 * pressureKpa);
   if (wet < -35) wet = -35;
@@ -29,7 +29,8 @@ export function wetBulbC(temperatureC: number, vapourPressureKpa: number, pressu
     const miss = (2501 - 2.326 * wet) * ws - 1.006 * (temperatureC - wet) - ratio * (2501 + 1.86 * temperatureC - 4.186 * wet);
     const step = miss / ((2501 - 2.326 * wet) * slope - 2.326 * ws + 1.006 + 4.186 * ratio);
     wet -= step;
-    if (Math.abs(step) < 1e-4) return wet;
+    // Newton's error is about the square of the step times 0.04 per °C: below 1e-4 °C here.
+    if (Math.abs(step) < 0.04) return wet;
   }
   return wet;
 }

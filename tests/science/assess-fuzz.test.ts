@@ -150,3 +150,16 @@ describe('hostile input', () => {
     expect(problems!.at(-1)!.message).toBe('and 44 more');
   });
 });
+
+describe('any place and any day', () => {
+  it('are answered, from pole to pole through a whole year', () => {
+    const zones = ['Etc/UTC', 'Etc/GMT+8', 'Etc/GMT-6', 'Etc/GMT-12', 'Etc/GMT+11'];
+    for (let turn = 0; turn < 3000; turn += 1) {
+      const zone = Math.floor(random() * zones.length);
+      const longitude = [0, -120, 90, 180, -165][zone]! + (random() - 0.5) * 20;
+      const day = new Date(Date.UTC(2026, 0, 1 + Math.floor(random() * 365))).toISOString().slice(0, 10);
+      const theCase = rawCase({ date: day, site: { latitude: Math.round((random() * 180 - 90) * 100) / 100, longitude: Math.max(-180, Math.min(180, longitude)), elevationM: Math.floor(random() * 3000), timeZone: zones[zone] }, hours: fairHours(undefined, day, 48) });
+      expect(check(JSON.stringify(theCase))).not.toBe('refused');
+    }
+  });
+});

@@ -1,4 +1,4 @@
-import { column } from '../columns.ts';
+import { byteColumn, column } from '../columns.ts';
 import { hourMs, type HourTable } from '../hours.ts';
 import { stepMinutes } from '../morning.ts';
 import { clampHeadroom, type LimitJudge, type PlanToJudge } from '../track.ts';
@@ -14,7 +14,7 @@ const unknown = 2;
 /** An hour is wet when its amount or its chance reaches the plan's threshold; unknown when a missing one could make it wet. */
 function hourStates(hours: HourTable, { limits }: PlanToJudge): Uint8Array {
   const { rainMm, rainProbabilityPct } = limits;
-  const states = new Uint8Array(hours.count);
+  const states = byteColumn(hours.count);
   for (let hour = 0; hour < hours.count; hour += 1) {
     const amount = hours.rainOfMm[hour]!;
     const chance = rainProbabilityPct === null ? 0 : hours.rainChanceOfPct[hour]!;
@@ -47,7 +47,7 @@ export const judgeRainFree: LimitJudge = ({ morning, hours }, plan) => {
   const states = hourStates(hours, plan);
   // From each hour on: hours until the first that is not dry, and what that one is.
   const until = column(hours.count + 1);
-  const endedBy = new Uint8Array(hours.count + 1).fill(unknown);
+  const endedBy = byteColumn(hours.count + 1).fill(unknown);
   for (let hour = hours.count - 1; hour >= 0; hour -= 1) {
     if (states[hour] === dry) {
       until[hour] = until[hour + 1]! + 1;

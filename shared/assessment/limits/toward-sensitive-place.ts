@@ -61,12 +61,13 @@ export const judgeTowardSensitivePlace: LimitJudge = ({ morning, windMs, directi
 
 /** Headroom of one place: by distance when it is out of reach, else by the angle off straight downwind; NaN = cannot be told. */
 function placeHeadroom(distanceM: number, isOut: boolean, reachM: number, apartDeg: number, halfAngleDeg: number): number {
+  if (distanceM === 0) return -1;
   const byAngle = clampHeadroom((apartDeg - halfAngleDeg) / Math.max(1, apartDeg > halfAngleDeg ? 180 - halfAngleDeg : halfAngleDeg));
   const byDistance = clampHeadroom((distanceM - reachM) / Math.max(1, reachM));
   // Out of reach is open whatever the direction, and whatever the wind when it is beyond the strongest.
   if (isOut) return Number.isNaN(byDistance) ? 1 : byAngle > byDistance ? byAngle : byDistance;
   if (Number.isNaN(byAngle) || Number.isNaN(byDistance)) return NaN;
-  return byAngle > 0 && distanceM > 0 ? byAngle : Math.min(-0.01, Math.max(byAngle, byDistance));
+  return byAngle > 0 ? byAngle : Math.min(-0.01, Math.max(byAngle, byDistance));
 }
 
 /** The place of the plan that closes or most nearly closes a step: its name; null without places. */

@@ -1,19 +1,11 @@
-import { windProfileFactor } from '../../atmosphere/wind-profile.ts';
 import { mapColumn } from '../columns.ts';
-import { above, below, type LimitJudge, type PlanToJudge } from '../track.ts';
-import type { PreparedMorning } from '../prepare.ts';
-
-/** Mean wind at the height that the label's figures are meant for, m/s. */
-function windAtLabelHeight({ windMs }: PreparedMorning, { limits }: PlanToJudge): Float64Array {
-  const factor = windProfileFactor(10, limits.windHeightM);
-  return mapColumn(windMs, (wind) => wind * factor);
-}
+import { above, below, type LimitJudge } from '../track.ts';
 
 /** Mean wind against the label's greatest, at the label's height [fao56, eq. 47]. */
 export const judgeWind: LimitJudge = (morning, plan) => {
   const max = plan.limits.windMaxMs;
   if (max === undefined) return null;
-  const value = windAtLabelHeight(morning, plan);
+  const value = morning.windAtMs(plan.limits.windHeightM);
   return { limit: 'wind', value, bound: max, headroom: mapColumn(value, (wind) => below(wind, max)), isHard: true };
 };
 
@@ -21,7 +13,7 @@ export const judgeWind: LimitJudge = (morning, plan) => {
 export const judgeStillAir: LimitJudge = (morning, plan) => {
   const min = plan.limits.windMinMs;
   if (min === undefined) return null;
-  const value = windAtLabelHeight(morning, plan);
+  const value = morning.windAtMs(plan.limits.windHeightM);
   return { limit: 'stillAir', value, bound: min, headroom: mapColumn(value, (wind) => above(wind, min)), isHard: true };
 };
 
