@@ -1,4 +1,5 @@
 import type { ForecastHour } from '../../shared/assessment/case.ts';
+import { unknownHour } from '../../shared/assessment/unknown-hour.ts';
 import type { Quantity } from './units.ts';
 
 export const hourMs = 3_600_000;
@@ -39,21 +40,6 @@ export function possible(field: HourField, value: number | null | undefined): nu
 /** Canonical UTC text of an instant on the hour. */
 export const hourText = (startMs: number): string => `${new Date(startMs).toISOString().slice(0, 19)}Z`;
 
-const emptyHour = (startMs: number): ForecastHour => ({
-  time: hourText(startMs),
-  temperature2mC: null,
-  dewPoint2mC: null,
-  relativeHumidityPct: null,
-  windSpeed10mMs: null,
-  windGust10mMs: null,
-  windFromDeg: null,
-  cloudCoverPct: null,
-  precipitationMm: null,
-  precipitationProbabilityPct: null,
-  shortwaveWm2: null,
-  temperature80mC: null,
-});
-
 /** Gathers values into canonical hours; what nobody puts stays null. */
 export class HourTable {
   readonly #hours = new Map<number, ForecastHour>();
@@ -62,7 +48,7 @@ export class HourTable {
   put(startMs: number, field: HourField, value: number | null | undefined): void {
     if (startMs % hourMs !== 0) return;
     let hour = this.#hours.get(startMs);
-    if (!hour) this.#hours.set(startMs, (hour = emptyHour(startMs)));
+    if (!hour) this.#hours.set(startMs, (hour = unknownHour(hourText(startMs))));
     hour[field] = possible(field, value);
   }
 

@@ -1,4 +1,5 @@
 import type { ForecastHour } from './case.ts';
+import { unknownHour } from './unknown-hour.ts';
 import { hourMs, hourStartMs, withHumidity } from './hours.ts';
 
 /** Hours of weather around a morning's start that its night, dew and wet leaves come from, and the drying goes on in. */
@@ -43,7 +44,7 @@ export function cautiousHours(hours: readonly ForecastHour[], sunAltitudeDegAt: 
   let next = 0;
   for (let ms = firstMs; ms <= lastMs; ms += hourMs) {
     const isGiven = hourStartMs(hours[next]!.time) === ms;
-    filled.push(fill(isGiven ? hours[next]! : emptyHour(ms), given, sunAltitudeDegAt(ms) <= 0, lowestC));
+    filled.push(fill(isGiven ? hours[next]! : unknownHour(new Date(ms).toISOString()), given, sunAltitudeDegAt(ms) <= 0, lowestC));
     if (isGiven) next += 1;
   }
   return filled;
@@ -78,18 +79,3 @@ function fill(hour: ForecastHour, given: ReadonlySet<Layer>, isNight: boolean, l
     temperature80mC: or('temperature80mC', temperature2mC === null ? null : temperature2mC + warmerAloftC),
   };
 }
-
-const emptyHour = (ms: number): ForecastHour => ({
-  time: new Date(ms).toISOString(),
-  temperature2mC: null,
-  dewPoint2mC: null,
-  relativeHumidityPct: null,
-  windSpeed10mMs: null,
-  windGust10mMs: null,
-  windFromDeg: null,
-  cloudCoverPct: null,
-  precipitationMm: null,
-  precipitationProbabilityPct: null,
-  shortwaveWm2: null,
-  temperature80mC: null,
-});

@@ -6,7 +6,7 @@ import type { placeKinds } from '../api/farms.ts';
 /** A rate range that a label gives for one crop, and maybe one target, instead of the general one. */
 export interface LabelUse {
   crop: string;
-  /** Empty: any target. */
+  /** Empty where it holds for every target. */
   target: string;
   rateMin: number;
   rateMax: number;

@@ -139,3 +139,18 @@ describe('a farm that moves', () => {
     for (const provider of ['openMeteo', 'nws', 'metNorway'] as const) fakes.setMood(provider, 'ok');
   });
 });
+
+describe('a farm beyond the polar circle', () => {
+  it('is told in winter that there is no daylight to spray in, instead of failing', async () => {
+    const { browser, at, daybreak } = await farm();
+    const { body: before } = await browser.get(at('')).expect(200);
+    const now = app.clock.now();
+    app.clock.set(new Date('2026-12-14T18:00:00Z'));
+    await browser.put(at('')).send({ name: before.name, latitude: 78.2, longitude: 15.6, elevationM: 10 }).expect(200);
+    const [first] = (await daybreak()).mornings;
+    expect(first!.verdicts[0]).toMatchObject({ verdict: 'hold', bindingLimit: 'time', sun: { civilDawn: null } });
+    expect(first!.verdicts[0]!.headline.us).toMatch(/no daylight/);
+    await browser.get(at(`/mornings/${first!.date}`)).expect(200);
+    app.clock.set(now);
+  });
+});

@@ -1,5 +1,6 @@
 import type { ForecastHour } from '../../shared/assessment/case.ts';
-import { datesOf, hourMs, known, noHour, type HourlyRecord } from './record.ts';
+import { unknownHour } from '../../shared/assessment/unknown-hour.ts';
+import { datesOf, hourMs, known, type HourlyRecord } from './record.ts';
 
 const radPerDeg = Math.PI / 180;
 const fields = (line: string): number[] => line.trim().split(/\s+/).map(Number);
@@ -51,8 +52,7 @@ export function mastHours(name: string, surfaceText: string, profileText: string
   const hours = means.map((before): ForecastHour => {
     const after = at.get(before.endMs + hourMs);
     return {
-      ...noHour,
-      time: new Date(before.endMs).toISOString(),
+      ...unknownHour(new Date(before.endMs).toISOString()),
       temperature2mC: middle(before.temperatureC, after?.temperatureC),
       relativeHumidityPct: middle(before.humidityPct, after?.humidityPct),
       windSpeed10mMs: middle(before.windMs, after?.windMs),

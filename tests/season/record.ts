@@ -15,19 +15,6 @@ export interface HourlyRecord {
 }
 
 export const hourMs = 3_600_000;
-export const noHour: Omit<ForecastHour, 'time'> = {
-  temperature2mC: null,
-  dewPoint2mC: null,
-  relativeHumidityPct: null,
-  windSpeed10mMs: null,
-  windGust10mMs: null,
-  windFromDeg: null,
-  cloudCoverPct: null,
-  precipitationMm: null,
-  precipitationProbabilityPct: null,
-  shortwaveWm2: null,
-  temperature80mC: null,
-};
 
 /** A finite number inside a range, else missing. */
 export const known = (value: number | undefined, least: number, most: number): number | null => (value === undefined || !(value >= least && value <= most) ? null : value);

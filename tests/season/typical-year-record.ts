@@ -1,5 +1,6 @@
 import type { ForecastHour } from '../../shared/assessment/case.ts';
-import { datesOf, hourMs, known, noHour, seenRain, type HourlyRecord } from './record.ts';
+import { unknownHour } from '../../shared/assessment/unknown-hour.ts';
+import { datesOf, hourMs, known, seenRain, type HourlyRecord } from './record.ts';
 
 /** Any year will do for a year made of months of several; this one has no leap day, as the record has none. */
 const year = 2001;
@@ -30,8 +31,7 @@ export function typicalYearHours(name: string, text: string): HourlyRecord {
     const [month, day] = row[0]!.split('/').map(Number) as [number, number];
     const tenths = known(cloud!(row), 0, 10);
     return {
-      ...noHour,
-      time: new Date(Date.UTC(year, month - 1, day) + Number(row[1]!.slice(0, 2)) * hourMs - offsetMs).toISOString(),
+      ...unknownHour(new Date(Date.UTC(year, month - 1, day) + Number(row[1]!.slice(0, 2)) * hourMs - offsetMs).toISOString()),
       temperature2mC: known(temperature!(row), -60, 60),
       dewPoint2mC: known(dewPoint!(row), -80, 50),
       relativeHumidityPct: known(humidity!(row), 0, 100),
